@@ -1,0 +1,17 @@
+//! The calculation of sagledger: a [`Building`](building::Building) in, [`Results`](results::Results) out.
+//!
+//! Pure: no files, no clock, no printing, no typesetting. Everything inside is SI (N, m, Pa, rad); units exist
+//! only at the two doors, where a job is read and where figures are printed.
+//!
+//! Sign conventions: loads and movements positive downward, reactions positive upward, sagging moments positive,
+//! shear positive where the part of the beam to the left is pushed up.
+
+pub mod actions;
+pub mod building;
+pub mod fault;
+pub mod limits;
+pub mod materials;
+pub mod sections;
+pub mod workings;
+
+pub use workings::quantity;
