@@ -6,6 +6,7 @@
 //! Sign conventions: loads and movements positive downward, reactions positive upward, sagging moments positive,
 //! shear positive where the part of the beam to the left is pushed up.
 
+pub mod analysis;
 pub mod actions;
 pub mod assumptions;
 pub mod building;
