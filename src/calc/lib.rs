@@ -7,10 +7,13 @@
 //! shear positive where the part of the beam to the left is pushed up.
 
 pub mod actions;
+pub mod assumptions;
 pub mod building;
+pub mod checks;
 pub mod fault;
 pub mod limits;
 pub mod materials;
+pub mod results;
 pub mod sections;
 pub mod workings;
 

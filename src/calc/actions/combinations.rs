@@ -63,8 +63,10 @@ pub struct Combination {
     pub purpose: Purpose,
     pub expression: Expression,
     pub leading: Leading,
-    /// Factor on permanent effects where they worsen, and where they relieve, the effect looked at.
+    /// Partial factor on permanent effects where they worsen, and where they relieve, the effect looked at.
     pub permanent: (f64, f64),
+    /// Reduction of unfavourable permanent actions, (6.10b); else 1.
+    pub xi: f64,
     /// Variable actions with the factor each enters with (partial factor times psi), in the order of the actions.
     pub variable: Vec<Variable>,
 }
@@ -86,6 +88,11 @@ impl Variable {
 }
 
 impl Combination {
+    /// The factor with which permanent effects enter, by whether they worsen the effect looked at.
+    pub fn permanent_factor(&self, worsens: bool) -> f64 {
+        if worsens { self.xi * self.permanent.0 } else { self.permanent.1 }
+    }
+
     /// "6.10, imposed A leading, imposed H with it"; characteristic ones begin "characteristic".
     pub fn name(&self, actions: &Actions) -> String {
         let head = match self.purpose {
@@ -229,7 +236,6 @@ fn combine(
     choices: Choices,
 ) -> Combination {
     let permanent = match (purpose, expression) {
-        (Purpose::Strength, Expression::E610b) => (choices.xi() * GAMMA_G_UNFAVOURABLE, GAMMA_G_FAVOURABLE),
         (Purpose::Strength, _) => (GAMMA_G_UNFAVOURABLE, GAMMA_G_FAVOURABLE),
         (Purpose::Equilibrium, _) => (GAMMA_G_EQUILIBRIUM_UNFAVOURABLE, GAMMA_G_EQUILIBRIUM_FAVOURABLE),
         (Purpose::Characteristic | Purpose::Frequent | Purpose::QuasiPermanent, _) => (1.0, 1.0),
@@ -252,5 +258,6 @@ fn combine(
             Variable { action, partial, psi, leads }
         })
         .collect();
-    Combination { purpose, expression, leading, permanent, variable }
+    let xi = if expression == Expression::E610b { choices.xi() } else { 1.0 };
+    Combination { purpose, expression, leading, permanent, xi, variable }
 }
