@@ -1,6 +1,6 @@
 //! Structural steel: grades, yield strengths, elastic constants.
 
-use crate::quantity::Stress;
+use crate::quantity::{Length, Stress};
 
 /// EN 1993-1-1 3.2.6.
 pub const E: Stress = Stress::n_per_mm2(210_000.0);
@@ -17,4 +17,59 @@ pub enum Grade {
     S275,
     S355,
     S460,
+}
+
+/// Thickness up to which a yield strength holds, mm, and the strength, N/mm2.
+type Step = (f64, f64);
+
+/// EN 10025-2 Table 6 (ReH), up to 100 mm.
+const S235: [Step; 5] = [(16.0, 235.0), (40.0, 225.0), (63.0, 215.0), (80.0, 215.0), (100.0, 215.0)];
+/// EN 10025-2 Table 6 (ReH), up to 100 mm.
+const S275: [Step; 5] = [(16.0, 275.0), (40.0, 265.0), (63.0, 255.0), (80.0, 245.0), (100.0, 235.0)];
+/// EN 10025-2 Table 6 (ReH), up to 100 mm.
+const S355: [Step; 5] = [(16.0, 355.0), (40.0, 345.0), (63.0, 335.0), (80.0, 325.0), (100.0, 315.0)];
+/// EN 10025-4 Table 5 (ReH, grade S460M), up to 100 mm.
+const S460: [Step; 5] = [(16.0, 460.0), (40.0, 440.0), (63.0, 430.0), (80.0, 410.0), (100.0, 400.0)];
+
+impl Grade {
+    pub const ALL: [Grade; 4] = [Grade::S235, Grade::S275, Grade::S355, Grade::S460];
+
+    /// As a job file and a drawing write it.
+    pub fn name(self) -> &'static str {
+        match self {
+            Grade::S235 => "S235",
+            Grade::S275 => "S275",
+            Grade::S355 => "S355",
+            Grade::S460 => "S460",
+        }
+    }
+
+    /// The grade of this name, capitals or not, surrounding spaces ignored.
+    pub fn parse(name: &str) -> Option<Grade> {
+        Grade::ALL.into_iter().find(|grade| grade.name().eq_ignore_ascii_case(name.trim()))
+    }
+
+    /// The product standard that its yield strengths for open sections come from.
+    pub fn product_standard(self) -> &'static str {
+        match self {
+            Grade::S235 | Grade::S275 | Grade::S355 => "EN 10025-2",
+            Grade::S460 => "EN 10025-4",
+        }
+    }
+
+    fn steps(self) -> &'static [Step] {
+        match self {
+            Grade::S235 => &S235,
+            Grade::S275 => &S275,
+            Grade::S355 => &S355,
+            Grade::S460 => &S460,
+        }
+    }
+}
+
+/// Yield strength f_y of open sections (UK NA.2.4 to EN 1993-1-1: from the product standard) for the thicker of flange
+/// and web; `None` where it is thicker than the table goes.
+pub fn yield_strength(grade: Grade, thickness: Length) -> Option<Stress> {
+    let step = grade.steps().iter().find(|(up_to, _)| thickness.to_m() <= Length::mm(*up_to).to_m())?;
+    Some(Stress::n_per_mm2(step.1))
 }
