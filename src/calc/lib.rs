@@ -6,6 +6,8 @@
 //! Sign conventions: loads and movements positive downward, reactions positive upward, sagging moments positive,
 //! shear positive where the part of the beam to the left is pushed up.
 
+#![deny(clippy::unwrap_used, clippy::expect_used, clippy::dbg_macro, clippy::todo, clippy::unimplemented)]
+
 pub mod actions;
 pub mod building;
 pub mod fault;
