@@ -6,8 +6,10 @@
 //! Sign conventions: loads and movements positive downward, reactions positive upward, sagging moments positive,
 //! shear positive where the part of the beam to the left is pushed up.
 
-pub mod analysis;
+#![deny(clippy::unwrap_used, clippy::expect_used, clippy::dbg_macro, clippy::todo, clippy::unimplemented)]
+
 pub mod actions;
+pub mod analysis;
 pub mod assumptions;
 pub mod building;
 pub mod checks;

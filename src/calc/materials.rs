@@ -73,3 +73,40 @@ pub fn yield_strength(grade: Grade, thickness: Length) -> Option<Stress> {
     let step = grade.steps().iter().find(|(up_to, _)| thickness.to_m() <= Length::mm(*up_to).to_m())?;
     Some(Stress::n_per_mm2(step.1))
 }
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+
+    /// EN 10025-2 Table 6 (S235 to S355) and EN 10025-4 Table 5 (S460M), ReH in N/mm2 by thickness in mm; from memory.
+    #[test]
+    fn yield_strength_steps_down_with_thickness() {
+        let thicknesses = [3.0, 16.0, 16.01, 40.0, 40.01, 63.0, 63.01, 80.0, 80.01, 100.0];
+        let cases = [
+            (Grade::S235, [235, 235, 225, 225, 215, 215, 215, 215, 215, 215]),
+            (Grade::S275, [275, 275, 265, 265, 255, 255, 245, 245, 235, 235]),
+            (Grade::S355, [355, 355, 345, 345, 335, 335, 325, 325, 315, 315]),
+            (Grade::S460, [460, 460, 440, 440, 430, 430, 410, 410, 400, 400]),
+        ];
+        for (grade, strengths) in cases {
+            for (thickness, strength) in thicknesses.into_iter().zip(strengths) {
+                let found = yield_strength(grade, Length::mm(thickness));
+                assert_eq!(found, Some(Stress::n_per_mm2(f64::from(strength))), "{grade:?} at {thickness} mm");
+            }
+            for beyond in [100.01, 140.0, f64::INFINITY, f64::NAN] {
+                assert_eq!(yield_strength(grade, Length::mm(beyond)), None, "{grade:?} at {beyond} mm");
+            }
+        }
+    }
+
+    #[test]
+    fn grades_are_known_by_their_names() {
+        for grade in Grade::ALL {
+            assert_eq!(Grade::parse(grade.name()), Some(grade));
+            assert_eq!(Grade::parse(&format!(" {} ", grade.name().to_lowercase())), Some(grade));
+        }
+        for other in ["", "S 275", "S275JR", "275", "S450"] {
+            assert_eq!(Grade::parse(other), None, "{other:?}");
+        }
+    }
+}

@@ -6,22 +6,26 @@ use super::{Section, catalogue};
 const MOST: usize = 3;
 /// Names further away than this many single-letter changes are no likely slips.
 const FURTHEST: usize = 4;
+/// Longer texts are not compared at all: no name comes near them.
+const LONGEST: usize = 32;
 
 /// The section of this name. `x`, `X` and `×` are the same, so are capitals and small letters; spaces do not count.
 pub fn find(name: &str) -> Option<&'static Section> {
-    let wanted = plain(name);
-    catalogue().iter().find(|section| plain(section.name) == wanted)
+    catalogue().iter().find(|section| plain(section.name).eq(plain(name)))
 }
 
 /// Up to three names of sections near one that was not found, the nearest first; none where nothing is near.
 /// Among names as near by their letters, those nearer by their mass come first.
 pub fn nearest(name: &str) -> Vec<&'static str> {
-    let wanted = family_last(plain(name));
+    if plain(name).nth(LONGEST).is_some() {
+        return Vec::new();
+    }
+    let wanted = family_last(plain(name).collect());
     let mass = mass_in(&wanted);
     let mut near: Vec<(usize, f64, &'static str)> = catalogue()
         .iter()
         .map(|section| {
-            let own = plain(section.name);
+            let own: String = plain(section.name).collect();
             let apart = match (mass, mass_in(&own)) {
                 (Some(wanted), Some(own)) => (wanted - own).abs(),
                 _ => 0.0,
@@ -35,9 +39,9 @@ pub fn nearest(name: &str) -> Vec<&'static str> {
 }
 
 /// Small letters, `x` for the sign of multiplication, no spaces.
-fn plain(name: &str) -> String {
+fn plain(name: &str) -> impl Iterator<Item = char> {
     let letters = name.chars().filter(|c| !c.is_whitespace()).flat_map(char::to_lowercase);
-    letters.map(|c| if c == '×' { 'x' } else { c }).collect()
+    letters.map(|c| if c == '×' { 'x' } else { c })
 }
 
 /// `ub254x146x37` as `254x146x37ub`.

