@@ -18,6 +18,8 @@ pub struct Results {
     pub takedown: TakeDown,
     /// Indices of beams in the order in which loads travel: a beam comes after all that land on it.
     pub order: Vec<usize>,
+    /// Connected beams, in the order of their first beam in `order`.
+    pub chains: Vec<Chain>,
     pub assumptions: Vec<Assumption>,
     pub verdict: Verdict,
 }
@@ -398,6 +400,30 @@ pub struct TakeDown {
     pub to_supports: Vec<(Action, Force)>,
     /// Sum of the sizes of all loads, the measure for the difference.
     pub absolute: Vec<(Action, Force)>,
+}
+
+/// Connected beams, moved together under one combination and arrangement.
+#[derive(Clone, Debug)]
+pub struct Chain {
+    /// In the order in which loads travel.
+    pub beams: Vec<usize>,
+    /// The beam whose stacked movement is closest to its limit (without limits: the greatest); its governing
+    /// combination and arrangement are those of the chain.
+    pub governing_beam: usize,
+    pub characteristic: CombinationId,
+    pub arrangement: Arrangement,
+    /// One a beam, in the order of `beams`.
+    pub curves: Vec<ChainCurve>,
+}
+
+#[derive(Clone, Debug)]
+pub struct ChainCurve {
+    pub beam: usize,
+    pub own: Curve,
+    /// Absolute, `settles` included.
+    pub stacked: Curve,
+    /// Absolute movement of each bearing.
+    pub bearings: Vec<Length>,
 }
 
 /// Curves to draw, each exact: polynomials between breaks.

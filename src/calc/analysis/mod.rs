@@ -13,4 +13,5 @@ pub mod geometry;
 pub mod loads;
 pub mod polynomial;
 pub mod profile;
+pub mod solved;
 pub mod system;

@@ -23,6 +23,16 @@ pub struct Response {
 /// Responses of all beams of a component to one load; none for a beam that it does not reach.
 pub type Responses = Vec<Option<Response>>;
 
+/// How a system differs from the building as it is described.
+#[derive(Clone, Copy, Debug, Default)]
+pub struct Variant {
+    /// Multiplies the second moment of area of one beam (local index), and its shear stiffness with it, so that its
+    /// whole movement scales.
+    pub scaled: Option<(usize, f64)>,
+    /// Looks at shear deformation where the basis leaves it out, and the other way round.
+    pub other_shear: bool,
+}
+
 /// A component ready to be solved: its system is factored once.
 pub struct System<'a> {
     building: &'a Building,
@@ -44,21 +54,20 @@ struct Case<'a> {
 }
 
 impl<'a> System<'a> {
-    /// Assembles and factors. `scaled` multiplies the second moment of area of one beam (local index), and its shear
-    /// stiffness with it, so that its whole movement scales.
+    /// Assembles and factors.
     pub fn new(
         building: &'a Building,
         members: &'a [usize],
         breaks: &'a [Vec<f64>],
-        scaled: Option<(usize, f64)>,
+        variant: Variant,
     ) -> Result<System<'a>, Fault> {
         let mut local = vec![None; building.beams.len()];
         for (n, &beam) in members.iter().enumerate() {
             local[beam] = Some(n);
         }
         let elastic = members.iter().enumerate().map(|(n, &beam)| {
-            let factor = scaled.filter(|s| s.0 == n).map_or(1.0, |s| s.1);
-            elastic_of(building, beam, factor)
+            let factor = variant.scaled.filter(|s| s.0 == n).map_or(1.0, |s| s.1);
+            elastic_of(building, beam, factor, building.basis.shear_flexibility != variant.other_shear)
         });
         let mut inner = Vec::new();
         for (n, &beam) in members.iter().enumerate() {
@@ -219,10 +228,10 @@ impl<'a> System<'a> {
 }
 
 /// Elastic properties of a beam of the building, its second moment of area (and shear area) scaled.
-fn elastic_of(building: &Building, beam: usize, factor: f64) -> Elastic {
+fn elastic_of(building: &Building, beam: usize, factor: f64, shear: bool) -> Elastic {
     let section = &building.beams[beam].section;
     let bending = E.si() * section.i_y.si() * factor;
     let shear_flexibility =
-        if building.basis.shear_flexibility { 1.0 / (G.si() * section.a_v.si() * factor) } else { 0.0 };
+        if shear { 1.0 / (G.si() * section.a_v.si() * factor) } else { 0.0 };
     Elastic { bending, shear_flexibility }
 }
