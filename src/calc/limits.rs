@@ -189,3 +189,20 @@ fn from_set(set: Option<LimitSet>, movement: Movement) -> Option<Limit> {
     let (_, bounds) = set.limits().into_iter().find(|(m, _)| *m == movement)?;
     Some(Limit { movement, bounds, from: LimitFrom::Set(set) })
 }
+
+/// The tightest of some bounds as a length, for a span; none where no bound is a length (tilt).
+pub fn tightest(bounds: &[Bound], span: Length) -> Option<Length> {
+    let lengths = bounds.iter().filter_map(|bound| match bound {
+        Bound::SpanOver(n) => Some(span.si() / n),
+        Bound::Length(length) => Some(length.si()),
+        Bound::OneIn(_) => None,
+    });
+    lengths.min_by(f64::total_cmp).map(Length::from_si)
+}
+
+impl Limits {
+    /// The limit in force for a movement.
+    pub fn of(&self, movement: Movement) -> Option<&Limit> {
+        self.limits.iter().find(|l| l.movement == movement)
+    }
+}

@@ -116,6 +116,17 @@ pub struct Stretch {
     pub to: Length,
 }
 
+impl Stretch {
+    /// The span that a limit such as span/250 means: for an overhang twice its length.
+    pub fn span_for_limits(&self) -> Length {
+        let length = self.to.si() - self.from.si();
+        match self.kind {
+            StretchKind::Span => Length::from_si(length),
+            StretchKind::Overhang | StretchKind::SeatEnd => Length::from_si(2.0 * length),
+        }
+    }
+}
+
 #[derive(Clone, Copy, Debug, PartialEq, Eq)]
 pub enum StretchKind {
     Span,

@@ -28,6 +28,10 @@ pub struct Contribution {
 }
 
 impl Contribution {
+    pub fn is_variable(&self) -> bool {
+        self.action != Action::Permanent
+    }
+
     /// Imposed rows stand wherever they make an effect worse (EN 1991-1-1 6.2.1(1)).
     pub fn is_free(&self) -> bool {
         matches!(self.action, Action::Imposed(_))
