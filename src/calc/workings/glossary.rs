@@ -32,6 +32,9 @@ macro_rules! glossary {
         )*
         /// All entries, with the names that checks call them by.
         pub static ALL: &[(&str, &Info)] = &[$((stringify!($name), &$name.info)),*];
+
+        #[cfg(test)]
+        const DIMENSIONS: &[super::unit::Dimension] = &[$(<$quantity>::DIMENSION),*];
     };
 }
 
@@ -149,7 +152,8 @@ mod tests {
 
     #[test]
     fn every_entry_says_what_it_is() {
-        for (name, info) in ALL {
+        for ((name, info), dimension) in ALL.iter().zip(DIMENSIONS) {
+            assert_eq!(info.unit.dimension(), *dimension, "{name}");
             assert!(!info.words.is_empty() && !info.base.is_empty(), "{name}");
             assert!(!info.words.ends_with('.') && !info.words.starts_with(char::is_uppercase), "{name}");
             assert_eq!(ALL.iter().filter(|(other, _)| other == name).count(), 1, "{name}");

@@ -329,12 +329,7 @@ impl State {
 }
 
 fn named<const F: i8, const L: i8>(symbol: &Symbol<'_, F, L>, value: f64) -> Variable {
-    Variable {
-        info: symbol.info,
-        sub: symbol.sub.as_deref().map(str::to_string),
-        value,
-        dimension: Dimension::of(F, L),
-    }
+    Variable { info: symbol.info, sub: symbol.sub.as_deref().map(str::to_string), value }
 }
 
 /// With a capital at the head and a full stop at the end.

@@ -102,6 +102,22 @@ impl<N: Number, const FORCE: i8, const LENGTH: i8> Q<N, FORCE, LENGTH> {
         Comparison { left: self.0, right: other.0, relation: Relation::MoreThan, dimension: Self::DIMENSION }
     }
 
+    /// `self > 0`.
+    pub fn is_positive(self) -> Comparison<N> {
+        Comparison {
+            left: self.0,
+            right: N::literal(0.0),
+            relation: Relation::MoreThan,
+            dimension: Self::DIMENSION,
+        }
+    }
+
+    /// `factor × self`, for a dimension that is not written out.
+    #[track_caller]
+    pub fn scaled_by(self, factor: Ratio<N>) -> Self {
+        Q(factor.0.times(self.0))
+    }
+
     /// The value in SI, plain. For results; nothing may be decided on it.
     pub fn plain(self) -> Q<f64, FORCE, LENGTH> {
         Q(self.0.value())

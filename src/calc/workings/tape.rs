@@ -64,7 +64,6 @@ pub(super) struct Variable {
     pub info: &'static Info,
     pub sub: Option<String>,
     pub value: f64,
-    pub dimension: Dimension,
 }
 
 impl Variable {
