@@ -67,11 +67,24 @@ impl Grade {
     }
 }
 
+/// A row of a table of yield strengths: up to which thickness it holds.
+#[derive(Clone, Copy, Debug, PartialEq)]
+pub struct YieldRow {
+    pub up_to: Length,
+    pub strength: Stress,
+}
+
+/// The row of the product standard's table for this thickness; `None` where it is thicker than the table goes.
+pub fn yield_row(grade: Grade, thickness: Length) -> Option<YieldRow> {
+    let of =
+        |(up_to, strength): &Step| YieldRow { up_to: Length::mm(*up_to), strength: Stress::n_per_mm2(*strength) };
+    grade.steps().iter().map(of).find(|row| thickness.to_m() <= row.up_to.to_m())
+}
+
 /// Yield strength f_y of open sections (UK NA.2.4 to EN 1993-1-1: from the product standard) for the thicker of flange
 /// and web; `None` where it is thicker than the table goes.
 pub fn yield_strength(grade: Grade, thickness: Length) -> Option<Stress> {
-    let step = grade.steps().iter().find(|(up_to, _)| thickness.to_m() <= Length::mm(*up_to).to_m())?;
-    Some(Stress::n_per_mm2(step.1))
+    yield_row(grade, thickness).map(|row| row.strength)
 }
 
 #[cfg(test)]

@@ -1,7 +1,19 @@
 //! What the actions add up to: the design (or characteristic) value of an effect from its parts.
+//!
+//! EN 1990 6.4.3.2, (6.10), (6.10a), (6.10b), and 6.5.3, (6.14b):
+//! E_d = Σ γ_G E_G + γ_Q E_Q,1 + Σ γ_Q ψ_0 E_Q,i, with ξ on permanent actions in (6.10b).
+//!
+//! Worked example (by hand): permanent 20 kNm, imposed A leading 8 kNm, imposed H accompanying 4 kNm with ψ_0 = 0.7:
+//! M_Ed = 1.35 × 20 + 1.5 × 8 + 1.5 × 0.7 × 4 = 43.2 kNm.
 
-use crate::actions::combinations::{Expression, Purpose};
+use std::borrow::Cow;
+
+use crate::actions::combinations::{Expression, Purpose, listed};
+use crate::actions::{Action, Category};
+use crate::quantity::{Q, Ratio};
 use crate::results::{Combinations, Effect, Part};
+use crate::workings::symbol::Entry;
+use crate::workings::{Number, Workings, glossary};
 
 /// The parts of an effect and the expression that combines them.
 #[derive(Clone, Debug, PartialEq)]
@@ -24,8 +36,208 @@ impl<const FORCE: i8, const LENGTH: i8> Combined<FORCE, LENGTH> {
         })
     }
 
-    /// The combined value, with its sign.
+    /// The combined value, with its sign, SI.
     pub fn value(&self) -> f64 {
         self.parts.iter().fold(0.0, |sum, p| sum + p.partial * p.reduction * p.value.si())
     }
+
+    /// "EN 1990 6.4.3.2, (6.10)".
+    pub fn clause(&self) -> &'static str {
+        match (self.purpose, self.expression) {
+            (Purpose::Equilibrium, _) => "EN 1990 6.4.3.2, set A",
+            (_, Expression::E610) => "EN 1990 6.4.3.2, (6.10)",
+            (_, Expression::E610a) => "EN 1990 6.4.3.2, (6.10a)",
+            (_, Expression::E610b) => "EN 1990 6.4.3.2, (6.10b)",
+            (_, Expression::E614b) => "EN 1990 6.5.3, (6.14b)",
+            (_, Expression::E615b) => "EN 1990 6.5.3, (6.15b)",
+            (_, Expression::E616b) => "EN 1990 6.5.3, (6.16b)",
+        }
+    }
+}
+
+/// How a combined effect is written.
+pub(super) struct Writing<const FORCE: i8, const LENGTH: i8> {
+    pub whole: &'static Entry<FORCE, LENGTH>,
+    /// The effect of one action; its name becomes the subscript.
+    pub part: &'static Entry<FORCE, LENGTH>,
+    /// "moments": what is combined.
+    pub plural: &'static str,
+}
+
+/// Terms in one line of the sum: more would not fit its column.
+const TERMS_A_LINE: usize = 3;
+
+/// The size of a combined effect, whichever way it acts.
+pub(super) fn size<N: Number, W: Workings<N>, const F: i8, const L: i8>(
+    w: &mut W,
+    combined: &Combined<F, L>,
+    writing: &Writing<F, L>,
+) -> Q<N, F, L> {
+    let sign = if combined.value() < 0.0 { -1.0 } else { 1.0 };
+    signed(w, combined, sign, writing)
+}
+
+/// A combined effect times `sign`, 1 or -1.
+pub(super) fn signed<N: Number, W: Workings<N>, const F: i8, const L: i8>(
+    w: &mut W,
+    combined: &Combined<F, L>,
+    sign: f64,
+    writing: &Writing<F, L>,
+) -> Q<N, F, L> {
+    let clause = combined.clause();
+    if combined.parts.is_empty() {
+        let nought = Q::from_si(0.0);
+        return w.looked_up(clause, writing.whole, nought, "no action contributes");
+    }
+    w.say(|| sentence(combined, sign, writing.plural));
+    let mut sum: Option<Q<N, F, L>> = None;
+    for (place, part) in combined.parts.iter().enumerate() {
+        let value = Q::from_si(sign * part.value.si());
+        let value = w.given(writing.part.of(action_name(combined, place)), value);
+        let term = factored(w, combined, part, value);
+        sum = Some(match sum {
+            None => term,
+            Some(sum) if place % TERMS_A_LINE == 0 => {
+                let lines_so_far = place / TERMS_A_LINE;
+                w.line(clause, writing.whole.of(lines_so_far.to_string()), sum) + term
+            }
+            Some(sum) => sum + term,
+        });
+    }
+    match sum {
+        Some(sum) => w.line(clause, writing.whole, sum),
+        None => w.given(writing.whole, Q::from_si(0.0)),
+    }
+}
+
+/// γ × reduction × value; factors of serviceability, all 1, are not written.
+fn factored<N: Number, W: Workings<N>, const F: i8, const L: i8>(
+    w: &mut W,
+    combined: &Combined<F, L>,
+    part: &Part<F, L>,
+    value: Q<N, F, L>,
+) -> Q<N, F, L> {
+    let permanent = part.action == Action::Permanent;
+    let several = combined.parts.iter().filter(|p| p.action == Action::Permanent).count() > 1;
+    let reduction: Option<Ratio<N>> = (part.reduction != 1.0).then(|| {
+        let reduction = Q::from_si(part.reduction);
+        match permanent {
+            true => w.given(&glossary::xi, reduction),
+            false if differing_psi(combined) => w.given(glossary::psi_0.of(letter(part.action)), reduction),
+            false => w.given(&glossary::psi_0, reduction),
+        }
+    });
+    let partial: Option<Ratio<N>> = match combined.purpose {
+        Purpose::Strength | Purpose::Equilibrium => {
+            let partial = Q::from_si(part.partial);
+            Some(match (permanent, part.partial <= 1.0, several) {
+                (true, true, _) => w.given(&glossary::gamma_G_inf, partial),
+                (true, false, true) => w.given(&glossary::gamma_G_sup, partial),
+                (true, false, false) => w.given(&glossary::gamma_G, partial),
+                (false, ..) => w.given(&glossary::gamma_Q, partial),
+            })
+        }
+        Purpose::Characteristic | Purpose::Frequent | Purpose::QuasiPermanent => None,
+    };
+    // As f64 both ways of leaving a factor out are a multiplication by 1.
+    match (partial, reduction) {
+        (Some(partial), Some(reduction)) => value.scaled_by(partial * reduction),
+        (Some(factor), None) | (None, Some(factor)) => value.scaled_by(factor),
+        (None, None) => value,
+    }
+}
+
+/// Accompanying actions come with different factors, so that each needs its own symbol.
+fn differing_psi<const F: i8, const L: i8>(combined: &Combined<F, L>) -> bool {
+    let mut psi = combined.parts.iter().filter(|p| p.action != Action::Permanent && p.reduction != 1.0);
+    let first = psi.next().map(|p| p.reduction);
+    psi.any(|p| Some(p.reduction) != first)
+}
+
+/// "G", "A" … "H", "S", "W"; where an action has several parts, which of them.
+fn action_name<const F: i8, const L: i8>(combined: &Combined<F, L>, place: usize) -> Cow<'static, str> {
+    let part = &combined.parts[place];
+    let same = |p: &&Part<F, L>| p.action == part.action;
+    let all = combined.parts.iter().filter(same).count();
+    match (part.action, all) {
+        (_, 0 | 1) => letter(part.action).into(),
+        (Action::Permanent, 2) if combined.parts.iter().filter(same).any(|p| p.partial != part.partial) => {
+            if part.partial > 1.0 { "G,sup".into() } else { "G,inf".into() }
+        }
+        (action, _) => {
+            let before = combined.parts[..place].iter().filter(same).count();
+            format!("{},{}", letter(action), before + 1).into()
+        }
+    }
+}
+
+fn letter(action: Action) -> &'static str {
+    match action {
+        Action::Permanent => "G",
+        Action::Imposed(Category::A) => "A",
+        Action::Imposed(Category::B) => "B",
+        Action::Imposed(Category::C) => "C",
+        Action::Imposed(Category::D) => "D",
+        Action::Imposed(Category::E) => "E",
+        Action::Imposed(Category::F) => "F",
+        Action::Imposed(Category::G) => "Q,G",
+        Action::Imposed(Category::H) => "H",
+        Action::Snow => "S",
+        Action::Wind(_) => "W",
+    }
+}
+
+fn spoken(action: Action) -> String {
+    match action {
+        Action::Permanent => "permanent".into(),
+        Action::Imposed(category) => format!("imposed {}", category.letter()),
+        Action::Snow => "snow".into(),
+        Action::Wind(_) => "wind".into(),
+    }
+}
+
+fn sentence<const F: i8, const L: i8>(combined: &Combined<F, L>, sign: f64, plural: &str) -> String {
+    let names = |leads: bool| {
+        let chosen = combined.parts.iter().filter(|p| p.action != Action::Permanent && p.leads == leads);
+        let mut names: Vec<String> = chosen.map(|p| spoken(p.action)).collect();
+        names.dedup();
+        names
+    };
+    let (led, with) = (names(true), names(false));
+    let mut words = match sign < 0.0 {
+        true => format!("The {plural} of each action are combined, turned so that the sum is positive."),
+        false => format!("The {plural} of each action are combined."),
+    };
+    let verb =
+        |names: &[String], one: &str, more: &str| if names.len() == 1 { one.to_string() } else { more.to_string() };
+    let capital = |text: String| {
+        let mut letters = text.chars();
+        letters.next().map(|c| c.to_uppercase().collect::<String>() + letters.as_str()).unwrap_or_default()
+    };
+    match (led.is_empty(), with.is_empty()) {
+        (true, true) => words.push_str(" Permanent actions alone make it greatest."),
+        (false, true) => {
+            words.push_str(&format!(" {} {}.", capital(listed(&led)), verb(&led, "leads", "lead together")));
+        }
+        (true, false) => {
+            words.push_str(&format!(
+                " None leads: {} {} with the permanent actions.",
+                listed(&with),
+                verb(&with, "comes", "come")
+            ));
+        }
+        (false, false) => words.push_str(&format!(
+            " {} {}; {} {} with {}.",
+            capital(listed(&led)),
+            verb(&led, "leads", "lead together"),
+            listed(&with),
+            verb(&with, "comes", "come"),
+            verb(&led, "it", "them"),
+        )),
+    }
+    let relieves = |p: &Part<F, L>| p.action == Action::Permanent && sign * p.value.si() < 0.0;
+    if combined.parts.iter().any(relieves) {
+        words.push_str(" Permanent actions that relieve keep the smaller factor.");
+    }
+    words
 }

@@ -1,7 +1,20 @@
-use super::Combined;
-use crate::limits::Limit;
-use crate::quantity::SecondMoment;
-use crate::results::Stretch;
+//! Own movements of a beam (total, after, variable) against their limits.
+//!
+//! w: size of the greatest own movement in a span, or of the downward one in an overhang, mm, under characteristic
+//! combinations (EN 1990 6.5.3, (6.14b)). w_lim: the tightest of the bounds, L the span between neighbouring bearings
+//! or twice an overhang. I_req = I_y w / w_lim on two bearings, own weight at the section in hand; on more, found by
+//! solving again (common practice).
+//!
+//! Worked example (by hand): w = 5 + 7 = 12 mm on a span of 4 m limited to span/250 = 16 mm: utilisation 0.75;
+//! with I_y = 4000 cm⁴ in hand, I_req = 4000 × 12 / 16 = 3000 cm⁴.
+
+use super::combined::{Writing, size};
+use super::{Combined, Outcome, Required, judge, limit};
+use crate::limits::{Limit, Movement};
+use crate::quantity::{Length, SecondMoment};
+use crate::results::{CheckUnit, Stretch};
+use crate::workings::lines::step;
+use crate::workings::{Number, Workings, glossary};
 
 /// An own movement (total, after or variable) against its limit.
 #[derive(Clone, Debug, PartialEq)]
@@ -21,4 +34,51 @@ pub enum SecondMomentInHand {
     Scales { provided: SecondMoment },
     /// Continuous: `required` was found by solving again with other second moments; none where none keeps the limit.
     Resolved { provided: SecondMoment, required: Option<SecondMoment> },
+}
+
+pub(super) fn check<N: Number, W: Workings<N>>(w: &mut W, inputs: &Deflection) -> Outcome {
+    let whole = match inputs.limit.movement {
+        Movement::Total => &glossary::w_tot,
+        Movement::After => &glossary::w_aft,
+        Movement::Variable => &glossary::w_var,
+        Movement::Stacked => &glossary::w_st,
+        Movement::Tilt => &glossary::dw,
+    };
+    let movement = size(w, &inputs.movement, &Writing { whole, part: &glossary::w, plural: "own movements" });
+    let w_lim = limit::length(w, &inputs.limit, &inputs.stretch);
+    let outcome = judge(w, || limit::bounds(&inputs.limit), movement, w_lim, CheckUnit::Length);
+    let required = required(w, &inputs.second_moment, |w, I_y| {
+        w.say("on two bearings the own movement is inversely proportional to the second moment of area");
+        step!(w, "common practice", I_req = I_y * movement / w_lim);
+        Required::Of(I_req.plain())
+    });
+    Outcome { required, clause: limit::bounds(&inputs.limit), ..outcome }
+}
+
+/// What the limit asks of the second moment of area; nothing where the limit is no length at all.
+pub(super) fn required<N: Number, W: Workings<N>>(
+    w: &mut W,
+    in_hand: &SecondMomentInHand,
+    scale: impl FnOnce(&mut W, SecondMoment<N>) -> Required,
+) -> Option<Required> {
+    match *in_hand {
+        SecondMomentInHand::Scales { provided } => {
+            let I_y = w.given(&glossary::I_y, provided);
+            Some(scale(w, I_y))
+        }
+        SecondMomentInHand::Resolved { required: Some(required), .. } => {
+            let why = "found by solving the building again with other second moments of area of this beam";
+            w.looked_up("common practice", &glossary::I_req, required, why);
+            Some(Required::Of(required))
+        }
+        SecondMomentInHand::Resolved { required: None, .. } => {
+            w.note("common practice", "no second moment of area of this beam keeps the limit");
+            Some(Required::BudgetUsed)
+        }
+    }
+}
+
+/// The greater of two limits, for an overhang beside a span.
+pub(super) fn larger<N: Number>(one: Length<N>, other: Length<N>) -> Length<N> {
+    crate::quantity::max(one, other)
 }

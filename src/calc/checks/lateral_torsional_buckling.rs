@@ -1,4 +1,24 @@
-use super::{Combined, Steel};
+//! Lateral-torsional buckling, EN 1993-1-1 6.3.2, of a segment between places where the beam is held.
+//!
+//! A segment whose flange in compression is held along its whole length is not susceptible (6.3.2.1(2)): M_Ed ≤
+//! M_c,Rd, the resistance of the section, and the entry says "compression flange held". Any other segment is not
+//! verified, and says so.
+//!
+//! Worked example: 152x152x23 UC in S275, held, M_Ed = 1.35 × 10 + 1.5 × 12 = 31.5 kNm: class 3,
+//! M_c,Rd = 45.1 kNm (EN 1993-1-1 Table 5.2 and section tables, from memory), utilisation 0.70.
+
+use super::bending::MOMENT;
+use super::combined::size;
+use super::section::bent;
+use super::{Combined, Outcome, Steel, judge, unverified};
+use crate::results::CheckUnit;
+use crate::workings::{Number, Workings};
+
+pub(super) const HELD_CLAUSE: &str = "EN 1993-1-1 6.3.2.1(2)";
+pub(super) const CLAUSE: &str = "EN 1993-1-1 6.3.2";
+
+/// Printed as the check's name where the flange is held.
+pub const HELD: &str = "compression flange held";
 
 /// A segment between places where the beam is held against lateral movement and twist.
 #[derive(Clone, Debug, PartialEq)]
@@ -8,4 +28,27 @@ pub struct LateralTorsionalBuckling {
     pub moment: Combined<1, 1>,
     /// The flange in compression is held along the whole segment.
     pub held: bool,
+}
+
+pub(super) fn check<N: Number, W: Workings<N>>(w: &mut W, inputs: &LateralTorsionalBuckling) -> Outcome {
+    let M_Ed = size(w, &inputs.moment, &MOMENT);
+    if !inputs.held {
+        w.note(
+            CLAUSE,
+            "the flange in compression is not held along the whole segment: lateral-torsional buckling is not verified",
+        );
+        return unverified(w, CLAUSE, M_Ed, CheckUnit::Moment, "lateral-torsional buckling");
+    }
+    let outcome = match bent(w, &inputs.steel) {
+        Ok(bent) => {
+            w.note(
+                HELD_CLAUSE,
+                "the flange in compression is held along the whole segment: the beam cannot buckle sideways, and its \
+                 section resists in full",
+            );
+            judge(w, HELD_CLAUSE, M_Ed, bent.M_c_Rd, CheckUnit::Moment)
+        }
+        Err(refusal) => unverified(w, HELD_CLAUSE, M_Ed, CheckUnit::Moment, refusal.reason()),
+    };
+    Outcome { note: Some(HELD), ..outcome }
 }

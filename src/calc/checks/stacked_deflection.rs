@@ -1,8 +1,25 @@
-use super::Combined;
-use super::deflection::SecondMomentInHand;
+//! Stacked deflection: the absolute movement of a beam, all that it inherits included, against its limit.
+//!
+//! w_st = w_own + w_inh + w_set, mm, at the place of the greatest ratio to the limit, all of one characteristic
+//! combination and arrangement. w_inh is the straight line between the movements of the two bearings beside the place,
+//! continued into an overhang; w_set comes from supports that settle. In an overhang the limit is the larger of its
+//! own and that of the span beside it. On two bearings the beam needs I_req = I_y w_own / (w_lim − w_inh − w_set): what
+//! it may move itself is what its supports have left of the limit (common practice).
+//!
+//! The hand rule simply adds the largest own movements down the route to the ground. It is printed beside the exact
+//! figure with the difference, and is never a check (common practice).
+//!
+//! Worked example (by hand): w_own = 10.4 mm, left bearing 9.0 mm, right bearing 2.0 mm, at 2 m of 5 m:
+//! w_inh = 9.0 + (2.0 − 9.0) × 2 / 5 = 6.2 mm, w_st = 16.6 mm; limit 5200 / 250 = 20.8 mm: utilisation 0.80.
+
+use super::combined::{Writing, signed};
+use super::deflection::{SecondMomentInHand, larger, required};
+use super::{Combined, Outcome, Required, judge, limit};
 use crate::limits::Limit;
 use crate::quantity::Length;
-use crate::results::Stretch;
+use crate::results::{CheckUnit, Stretch};
+use crate::workings::lines::step;
+use crate::workings::{Number, Workings, glossary};
 
 /// An absolute movement against its limit, at the place of the greatest ratio to it. `own`, `inherited` and
 /// `settled` belong to one combination, arrangement and place and add up to it.
@@ -32,7 +49,7 @@ pub struct Inherited {
     pub to_place: Length,
 }
 
-/// How far a bearing goes down without `settles`.
+/// How far a bearing goes down; without `settles` unless said otherwise.
 #[derive(Clone, Debug, PartialEq)]
 pub struct BearingMovement {
     /// Mark of the beam or name of the wall.
@@ -49,4 +66,130 @@ pub struct HandRule {
     pub route: Vec<(String, Length)>,
     /// The greatest stacked movement of this beam.
     pub exact: Length,
+}
+
+pub(super) fn check<N: Number, W: Workings<N>>(w: &mut W, inputs: &StackedDeflection) -> Outcome {
+    let own = Writing { whole: &glossary::w_own, part: &glossary::w, plural: "own movements" };
+    let w_own = signed(w, &inputs.own, 1.0, &own);
+    let w_inh = inherited(w, &inputs.inherited);
+    let w_set = settled(w, inputs.settled);
+    w.say("own, inherited and settled movement add up");
+    let sum = match w_set {
+        Some(w_set) => w_own + w_inh + w_set,
+        None => w_own + w_inh,
+    };
+    step!(w, "common practice", w_st = sum);
+    let up = w_st.plain().si() < 0.0;
+    let size = if up {
+        step!(w, "common practice", w_up = -w_st);
+        w_up
+    } else {
+        w_st
+    };
+
+    let mut w_lim = limit::length(w, &inputs.limit, &inputs.stretch);
+    if let Some(beside) = &inputs.beside {
+        let of_span = limit::length(w, &inputs.limit, beside);
+        w.say("the larger of the overhang\u{2019}s limit and that of the span beside it counts");
+        w_lim = w.line("common practice", glossary::w_lim.of("max"), larger(w_lim, of_span));
+    }
+    let outcome = judge(w, || limit::bounds(&inputs.limit), size, w_lim, CheckUnit::Length);
+
+    let required = required(w, &inputs.second_moment, |w, I_y| {
+        let down = |movement: Length<N>| if up { -movement } else { movement };
+        let used = match w_set {
+            Some(w_set) => w_lim - down(w_inh) - down(w_set),
+            None => w_lim - down(w_inh),
+        };
+        w.say("what the supports have used of the limit is no longer the beam\u{2019}s own");
+        step!(w, "common practice", w_left = used);
+        let some_left = w.when(
+            "common practice",
+            w_left.is_positive(),
+            "something of the limit is left for the beam itself",
+            "the supports have used the whole limit: no second moment of area of this beam keeps it",
+        );
+        if !some_left {
+            return Required::BudgetUsed;
+        }
+        w.say("the beam\u{2019}s own movement is inversely proportional to its second moment of area");
+        step!(w, "common practice", I_req = I_y * down(w_own) / w_left);
+        Required::Of(I_req.plain())
+    });
+    if let Some(rule) = &inputs.hand_rule {
+        hand_rule(w, rule);
+    }
+    Outcome { required, clause: limit::bounds(&inputs.limit), ..outcome }
+}
+
+/// w_inh = w_1 + (w_2 − w_1) x / L.
+fn inherited<N: Number, W: Workings<N>>(w: &mut W, line: &Inherited) -> Length<N> {
+    if line.left.movement.si() == 0.0 && line.right.movement.si() == 0.0 {
+        let nought = Length::from_si(0.0);
+        return w.looked_up("common practice", &glossary::w_inh, nought, "both bearings stay where they are");
+    }
+    let (w_1, w_2) = bearings(w, &line.left, &line.right);
+    let (x, L) = (w.given(&glossary::x, line.to_place), w.given(&glossary::L, line.span));
+    w.say("what the place inherits is the straight line between the two bearings");
+    step!(w, "common practice", w_inh = w_1 + (w_2 - w_1) * x / L);
+    w_inh
+}
+
+/// The movements of two bearings, under the names of what they stand on.
+pub(super) fn bearings<N: Number, W: Workings<N>>(
+    w: &mut W,
+    left: &BearingMovement,
+    right: &BearingMovement,
+) -> (Length<N>, Length<N>) {
+    let same = left.on == right.on;
+    let mut one = |bearing: &BearingMovement, side: &'static str| {
+        let sub = match (same || left.wall && right.wall, bearing.wall) {
+            (true, _) => side.to_string(),
+            (false, true) => "wall".to_string(),
+            (false, false) => bearing.on.clone(),
+        };
+        if bearing.movement.si() == 0.0 {
+            return w.given(glossary::w.of(sub), bearing.movement);
+        }
+        let on = bearing.on.clone();
+        w.looked_up("solution of the whole building", glossary::w.of(sub), bearing.movement, move || {
+            format!("{on} goes down by this much under the bearing.")
+        })
+    };
+    (one(left, "left"), one(right, "right"))
+}
+
+fn settled<N: Number, W: Workings<N>>(w: &mut W, settled: Length) -> Option<Length<N>> {
+    if settled.si() == 0.0 {
+        return None;
+    }
+    Some(w.known(&glossary::w_set, settled, "solution of the whole building"))
+}
+
+/// Never a check: the sum of the largest own movements down the route, and how far it is off.
+fn hand_rule<N: Number, W: Workings<N>>(w: &mut W, rule: &HandRule) {
+    let own = |w: &mut W, (mark, movement): &(String, Length)| w.given(glossary::w_own.of(mark.clone()), *movement);
+    let [first, rest @ ..] = rule.route.as_slice() else { return };
+    let mut sum = own(w, first);
+    for next in rest {
+        sum = sum + own(w, next);
+    }
+    w.say("by the hand rule the largest own movements down the route are simply added");
+    step!(w, "common practice; no check", w_hand = sum);
+    let w_exact = w.known(&glossary::w_exact, rule.exact, "solution of the whole building");
+    let safe = w.when(
+        "common practice; no check",
+        w_exact.at_most(w_hand),
+        "the hand rule is on the safe side",
+        "the hand rule is on the unsafe side",
+    );
+    if safe {
+        w.say("it is safe by");
+        step!(w, "common practice; no check", dw_hand = w_hand - w_exact);
+        let _ = dw_hand;
+    } else {
+        w.say("it is unsafe by");
+        step!(w, "common practice; no check", dw_hand = w_exact - w_hand);
+        let _ = dw_hand;
+    }
 }

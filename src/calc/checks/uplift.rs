@@ -1,5 +1,18 @@
-use super::Combined;
+//! Uplift at a bearing, EN 1990 6.4.1(1)P: what lifts is at most what holds the bearing down.
+//!
+//! R_up: size of the least reaction over sets A and B of EN 1990 Table A1.2 where it is negative, kN, else 0.
+//! R_held: design resistance of what holds the bearing down, kN; without it 0, since a seat does not pull.
+//!
+//! Worked example (by hand): permanent 4 kN at 0.90 and wind −8 kN at 1.5 leave 3.6 − 12 = −8.4 kN: 8.4 kN of uplift;
+//! held down for 12 kN: utilisation 0.70.
+
+use super::combined::{Writing, signed};
+use super::{Combined, Outcome, judge};
 use crate::quantity::Force;
+use crate::results::{CheckUnit, Verdict};
+use crate::workings::{Number, Workings, glossary};
+
+pub(super) const CLAUSE: &str = "EN 1990 6.4.1(1)P";
 
 /// `reaction`: the least reaction of a bearing over sets A and B, upward positive, so that uplift is negative.
 #[derive(Clone, Debug, PartialEq)]
@@ -7,4 +20,32 @@ pub struct Uplift {
     pub reaction: Combined<1, 0>,
     /// Design resistance of what holds the bearing down.
     pub held_down: Option<Force>,
+}
+
+pub(super) fn check<N: Number, W: Workings<N>>(w: &mut W, inputs: &Uplift) -> Outcome {
+    let least = Writing { whole: &glossary::R_min, part: &glossary::R, plural: "reactions" };
+    let lifting = Writing { whole: &glossary::R_up, part: &glossary::R, plural: "reactions" };
+    let nothing = Outcome {
+        demand: Some(0.0),
+        capacity: Some(inputs.held_down.map_or(0.0, Force::si)),
+        unit: CheckUnit::Force,
+        utilisation: Some(0.0),
+        verdict: Verdict::Met,
+        reason: None,
+        clause: CLAUSE.into(),
+        note: None,
+        required: None,
+    };
+    if inputs.reaction.value() >= 0.0 {
+        let R_min = signed(w, &inputs.reaction, 1.0, &least);
+        let _ = R_min;
+        w.note(CLAUSE, "the least reaction still presses down: the bearing does not lift");
+        return nothing;
+    }
+    let R_up = signed(w, &inputs.reaction, -1.0, &lifting);
+    let R_held = match inputs.held_down {
+        Some(held) => w.known(&glossary::R_held, held, "as the bearing says"),
+        None => w.looked_up(CLAUSE, &glossary::R_held, Force::from_si(0.0), "nothing holds the bearing down"),
+    };
+    judge(w, CLAUSE, R_up, R_held, CheckUnit::Force)
 }
