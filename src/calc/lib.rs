@@ -12,12 +12,15 @@ pub mod actions;
 pub mod analysis;
 pub mod assumptions;
 pub mod building;
+pub mod calculate;
 pub mod checks;
 pub mod fault;
 pub mod limits;
 pub mod materials;
+pub mod members;
 pub mod results;
 pub mod sections;
 pub mod workings;
 
+pub use calculate::calculate;
 pub use workings::quantity;

@@ -539,3 +539,19 @@ impl Load {
         matches!(self, Load::Point { .. })
     }
 }
+
+impl Curve {
+    /// Value at a place along the beam; at a step that of the piece before it.
+    pub fn at(&self, x: f64) -> f64 {
+        let k = self.pieces.partition_point(|p| p.to < x).min(self.pieces.len().saturating_sub(1));
+        self.pieces.get(k).map_or(0.0, |p| p.at(x))
+    }
+}
+
+impl Piece {
+    /// Value at a place along the beam by this piece's polynomial.
+    pub fn at(&self, x: f64) -> f64 {
+        let t = x - self.from;
+        self.coefficients.iter().rev().fold(0.0, |sum, c| sum * t + c)
+    }
+}

@@ -233,7 +233,6 @@ impl<'a> System<'a> {
 fn elastic_of(building: &Building, beam: usize, factor: f64, shear: bool) -> Elastic {
     let section = &building.beams[beam].section;
     let bending = E.si() * section.i_y.si() * factor;
-    let shear_flexibility =
-        if shear { 1.0 / (G.si() * section.a_v.si() * factor) } else { 0.0 };
+    let shear_flexibility = if shear { 1.0 / (G.si() * section.a_v.si() * factor) } else { 0.0 };
     Elastic { bending, shear_flexibility }
 }

@@ -26,7 +26,11 @@ impl Own {
 }
 
 /// The movement that a limit looks at in a stretch: the greatest size within a span, downward in an overhang.
-pub fn in_stretch(envelope: &Envelope, sets: &[crate::analysis::envelope::Set], s: &Stretch) -> Option<Found<0, 1>> {
+pub fn in_stretch(
+    envelope: &Envelope,
+    sets: &[crate::analysis::envelope::Set],
+    s: &Stretch,
+) -> Option<Found<0, 1>> {
     let range = (s.from.si(), s.to.si());
     match s.kind {
         StretchKind::Span => envelope.greatest_size(sets, range),

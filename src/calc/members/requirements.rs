@@ -61,12 +61,7 @@ struct Collect<'c> {
 ///
 /// # Errors
 /// Those of solving a continuous beam again with other second moments of area.
-pub fn requirements(
-    solved: &Solved,
-    local: usize,
-    sets: &Sets,
-    known: &Known,
-) -> Result<Requirements, Fault> {
+pub fn requirements(solved: &Solved, local: usize, sets: &Sets, known: &Known) -> Result<Requirements, Fault> {
     let beam = solved.beam(local);
     let steel = Steel { section: beam.section, grade: beam.grade, choices: solved.building.basis.choices };
     let mut all = Collect { solved, local, sets, known, steel, checks: Vec::new(), required: Vec::new() };
@@ -168,8 +163,7 @@ impl Collect<'_> {
         let strength = [self.sets.strength()];
         let scale = self.known.forces.moment().size();
         let restraint = &self.solved.beam(self.local).restraint;
-        let (top, bottom) =
-            (restraint.top == FlangeHold::Continuous, restraint.bottom == FlangeHold::Continuous);
+        let (top, bottom) = (restraint.top == FlangeHold::Continuous, restraint.bottom == FlangeHold::Continuous);
         for s in self.solved.stretches(self.local) {
             if s.kind == StretchKind::SeatEnd {
                 continue;

@@ -267,7 +267,7 @@ impl<'t> Workings<Traced<'t>> for &'t Tape {
         let (over, under, node) = (demand.0.on(self), capacity.0.on(self), ratio.0.on(self));
         let info = &super::glossary::utilisation.info;
         self.with(|s| {
-            let id = s.variable(Variable { info, sub: None, value: found.utilisation, dimension: Dimension::NONE });
+            let id = s.variable(Variable { info, sub: None, value: found.utilisation });
             let words = match (s.words_of(over), s.words_of(under)) {
                 (Some(over), Some(under)) => sentence(&format!("{over} over {under}")),
                 _ => sentence("demand over capacity"),
