@@ -57,9 +57,17 @@ pub fn contributions(
                 let Some(shape) = resolved.shape.within(s.from.si(), s.to.si(), stretch == 0) else { continue };
                 units.push(UnitLoad { beam: local, shape });
                 let unit = units.len() - 1;
-                list.extend(resolved.amounts.iter().filter(|(_, amount)| *amount != 0.0).map(|&(action, amount)| {
-                    Contribution { unit, beam, row, stretch, action, stage: resolved.stage, amount }
-                }));
+                list.extend(resolved.amounts.iter().filter(|(_, amount)| *amount != 0.0).map(
+                    |&(action, amount)| Contribution {
+                        unit,
+                        beam,
+                        row,
+                        stretch,
+                        action,
+                        stage: resolved.stage,
+                        amount,
+                    },
+                ));
             }
         }
     }

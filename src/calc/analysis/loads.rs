@@ -92,8 +92,12 @@ fn variable_actions(building: &Building, row: &LoadRow) -> Vec<Found> {
             None => Vec::new(),
         },
         Load::Wall { .. } => Vec::new(),
-        Load::Line { direct, .. } => list(direct.imposed.map(|i| i.0), direct.snow.is_some(), direct.wind.is_some()),
-        Load::Point { direct, .. } => list(direct.imposed.map(|i| i.0), direct.snow.is_some(), direct.wind.is_some()),
+        Load::Line { direct, .. } => {
+            list(direct.imposed.map(|i| i.0), direct.snow.is_some(), direct.wind.is_some())
+        }
+        Load::Point { direct, .. } => {
+            list(direct.imposed.map(|i| i.0), direct.snow.is_some(), direct.wind.is_some())
+        }
     }
 }
 

@@ -203,7 +203,9 @@ impl<'a> System<'a> {
                     Carrier::Wall(_) if case.settles => seat.settles.si(),
                     Carrier::Wall(_) => 0.0,
                     Carrier::Beam { beam, lands } => self.local[beam]
-                        .and_then(|c| responses[c].as_ref().map(|r| value_at(&self.breaks[c], &r.movement, lands.si())))
+                        .and_then(|c| {
+                            responses[c].as_ref().map(|r| value_at(&self.breaks[c], &r.movement, lands.si()))
+                        })
                         .unwrap_or(0.0),
                 };
                 (seat.at.si(), movement)
