@@ -67,7 +67,8 @@ pub struct Combination {
     pub permanent: (f64, f64),
     /// Reduction of unfavourable permanent actions, (6.10b); else 1.
     pub xi: f64,
-    /// Variable actions with the factor each enters with (partial factor times psi), in the order of the actions.
+    /// Variable actions with the factor each enters with (partial factor times psi), in the order of the actions;
+    /// those whose factor is zero take no part and are left out.
     pub variable: Vec<Variable>,
 }
 
@@ -103,7 +104,7 @@ impl Combination {
             Purpose::QuasiPermanent => "quasi-permanent".to_string(),
         };
         let names = |leads: bool| -> Vec<String> {
-            let chosen = self.variable.iter().filter(|v| v.leads == leads && v.factor() != 0.0);
+            let chosen = self.variable.iter().filter(|v| v.leads == leads);
             chosen.map(|v| actions.name(v.action)).collect()
         };
         let mut parts = vec![head];
@@ -122,10 +123,11 @@ impl Combination {
     /// "imposed A leads", as narrow tables print it.
     pub fn short_name(&self, actions: &Actions) -> String {
         let led: Vec<String> = self.variable.iter().filter(|v| v.leads).map(|v| actions.name(v.action)).collect();
-        match (led.is_empty(), led.len()) {
-            (true, _) => "permanent".into(),
-            (false, 1) => format!("{} leads", led[0]),
-            (false, _) => "imposed leads".into(),
+        match led.as_slice() {
+            [] if self.variable.is_empty() => "permanent".into(),
+            [] => "none leads".into(),
+            [one] => format!("{one} leads"),
+            [_, _, ..] => "imposed leads".into(),
         }
     }
 }
@@ -139,36 +141,36 @@ pub fn listed(words: &[String]) -> String {
     }
 }
 
-/// All combinations of one purpose, in a fixed order. Without variable actions there is one, permanent alone.
+/// All combinations of one purpose, each once, in a fixed order. Without variable actions there is permanent alone.
 pub fn combinations(purpose: Purpose, rule: StrengthRule, choices: Choices, actions: &Actions) -> Vec<Combination> {
-    let mut list = Vec::new();
+    let mut list: Vec<Combination> = Vec::new();
+    let mut add = |expression, leading, world: &[Action]| {
+        let combination = combine(purpose, expression, leading, world, choices);
+        // Where what tells two worlds apart has psi = 0, both give the same.
+        if !list.contains(&combination) {
+            list.push(combination);
+        }
+    };
     for world in worlds(actions) {
         for leading in leaders(purpose, &world) {
-            match (purpose, rule) {
-                (Purpose::Strength, StrengthRule::Single) => {
-                    list.push(combine(purpose, Expression::E610, leading, &world, choices));
-                }
-                (Purpose::Strength, StrengthRule::Pair) => {
-                    list.push(combine(purpose, Expression::E610b, leading, &world, choices));
-                }
-                (Purpose::Equilibrium, _) => {
-                    list.push(combine(purpose, Expression::E610, leading, &world, choices))
-                }
-                (Purpose::Characteristic, _) => {
-                    list.push(combine(purpose, Expression::E614b, leading, &world, choices));
-                }
-                (Purpose::Frequent, _) => list.push(combine(purpose, Expression::E615b, leading, &world, choices)),
-                (Purpose::QuasiPermanent, _) => {
-                    list.push(combine(purpose, Expression::E616b, leading, &world, choices));
-                }
-            }
+            add(expression_with_leader(purpose, rule), leading, &world);
         }
         if (purpose, rule) == (Purpose::Strength, StrengthRule::Pair) {
-            list.push(combine(purpose, Expression::E610a, Leading::None, &world, choices));
+            add(Expression::E610a, Leading::None, &world);
         }
     }
-    list.dedup();
     list
+}
+
+/// The expression in which each variable action takes its turn as the leading one (none leads in 6.16b).
+fn expression_with_leader(purpose: Purpose, rule: StrengthRule) -> Expression {
+    match (purpose, rule) {
+        (Purpose::Strength, StrengthRule::Single) | (Purpose::Equilibrium, _) => Expression::E610,
+        (Purpose::Strength, StrengthRule::Pair) => Expression::E610b,
+        (Purpose::Characteristic, _) => Expression::E614b,
+        (Purpose::Frequent, _) => Expression::E615b,
+        (Purpose::QuasiPermanent, _) => Expression::E616b,
+    }
 }
 
 /// Sets of variable actions that can act together: with category H, or with snow and one wind case.
@@ -244,7 +246,7 @@ fn combine(
         Purpose::Strength | Purpose::Equilibrium => GAMMA_Q,
         Purpose::Characteristic | Purpose::Frequent | Purpose::QuasiPermanent => 1.0,
     };
-    let variable = world
+    let variable: Vec<Variable> = world
         .iter()
         .map(|&action| {
             let factors = choices.psi(action);
@@ -257,7 +259,10 @@ fn combine(
             };
             Variable { action, partial, psi, leads }
         })
+        .filter(|variable| variable.factor() != 0.0)
         .collect();
+    // A leading action with psi_1 = 0 leads nothing.
+    let leading = if variable.iter().any(|variable| variable.leads) { leading } else { Leading::None };
     let xi = if expression == Expression::E610b { choices.xi() } else { 1.0 };
     Combination { purpose, expression, leading, permanent, xi, variable }
 }

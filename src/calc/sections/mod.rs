@@ -62,7 +62,7 @@ pub struct Section {
     pub w_pl_y: Volume,
     pub w_el_z: Volume,
     pub w_pl_z: Volume,
-    /// Torsion constant of St Venant.
+    /// Torsion constant of St Venant, by a formula that is within 0.8 % (El Darwish and Johnston 1965).
     pub i_t: SecondMoment,
     /// Warping constant.
     pub i_w: Warping,
