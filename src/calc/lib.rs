@@ -18,8 +18,11 @@ pub mod fault;
 pub mod limits;
 pub mod materials;
 pub mod members;
+pub mod outside;
 pub mod results;
 pub mod sections;
+pub mod standards;
+pub mod words;
 pub mod workings;
 
 pub use calculate::calculate;
