@@ -46,7 +46,7 @@ pub(super) fn check<N: Number, W: Workings<N>>(w: &mut W, inputs: &Deflection) -
     };
     let movement = size(w, &inputs.movement, &Writing { whole, part: &glossary::w, plural: "own movements" });
     let w_lim = limit::length(w, &inputs.limit, &inputs.stretch);
-    let outcome = judge(w, || limit::bounds(&inputs.limit), movement, w_lim, CheckUnit::Length);
+    let outcome = judge(w, "", movement, w_lim, CheckUnit::Length);
     let required = required(w, &inputs.second_moment, |w, I_y| {
         w.say("on two bearings the own movement is inversely proportional to the second moment of area");
         step!(w, "common practice", I_req = I_y * movement / w_lim);

@@ -93,7 +93,7 @@ pub(super) fn check<N: Number, W: Workings<N>>(w: &mut W, inputs: &StackedDeflec
         w.say("the larger of the overhang\u{2019}s limit and that of the span beside it counts");
         w_lim = w.line("common practice", glossary::w_lim.of("max"), larger(w_lim, of_span));
     }
-    let outcome = judge(w, || limit::bounds(&inputs.limit), size, w_lim, CheckUnit::Length);
+    let outcome = judge(w, "", size, w_lim, CheckUnit::Length);
 
     let required = required(w, &inputs.second_moment, |w, I_y| {
         let down = |movement: Length<N>| if up { -movement } else { movement };
@@ -184,11 +184,11 @@ fn hand_rule<N: Number, W: Workings<N>>(w: &mut W, rule: &HandRule) {
         "the hand rule is on the unsafe side",
     );
     if safe {
-        w.say("it is safe by");
+        w.say("it is safe by the difference");
         step!(w, "common practice; no check", dw_hand = w_hand - w_exact);
         let _ = dw_hand;
     } else {
-        w.say("it is unsafe by");
+        w.say("it is unsafe by the difference");
         step!(w, "common practice; no check", dw_hand = w_exact - w_hand);
         let _ = dw_hand;
     }

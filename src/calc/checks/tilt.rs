@@ -29,7 +29,7 @@ pub(super) fn check<N: Number, W: Workings<N>>(w: &mut W, inputs: &TiltOfBearing
     step!(w, "common practice", dw = difference);
     let span = Stretch { kind: StretchKind::Span, from: Length::from_si(0.0), to: inputs.span };
     let w_lim = limit::length(w, &inputs.limit, &span);
-    let judged = judge(w, || limit::with_set(&inputs.limit), dw, w_lim, CheckUnit::Ratio);
+    let judged = judge(w, "", dw, w_lim, CheckUnit::Ratio);
     let over_span = |movement: Length<N>| movement.plain().si() / inputs.span.si();
     Outcome {
         demand: Some(over_span(dw)),

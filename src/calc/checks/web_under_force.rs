@@ -110,6 +110,7 @@ fn resistance<N: Number, W: Workings<N>>(w: &mut W, inputs: &WebUnderForce, s: &
             (k_F, Some(l_e))
         }
     };
+    w.say("critical force of the web");
     step!(w, "EN 1993-1-5 6.4(1), (6.5)", F_cr = 0.9 * k_F * E * t_w.cubed() / h_w);
     w.say("flange and web have one yield strength, which leaves their widths");
     step!(w, "EN 1993-1-5 6.5(1), (6.8)", m_1 = b / t_w);
@@ -120,13 +121,14 @@ fn resistance<N: Number, W: Workings<N>>(w: &mut W, inputs: &WebUnderForce, s: &
     let slender = w.when(
         "EN 1993-1-5 6.5(1), (6.9)",
         lambda_F.more_than(number(0.5)),
-        "the slenderness is above 0.5, so that m_2 stays",
-        "the slenderness is not above 0.5, so that m_2 is nought and the length is found again",
+        "the slenderness is above 0.5, so that the web keeps its part in spreading the force",
+        "the slenderness is not above 0.5, so that the web has no part in spreading the force, and the length is found again",
     );
     if !slender {
-        let m_2 = w.looked_up("EN 1993-1-5 6.5(1), (6.9)", &glossary::m_2, Ratio::from_si(0.0), "m_2 is nought");
+        let m_2 = w.looked_up("EN 1993-1-5 6.5(1), (6.9)", &glossary::m_2, Ratio::from_si(0.0), "the web has no part in spreading the force");
         (l_y, lambda_F) = web.slenderness(w, m_2);
     }
+    w.say("the web buckles before all of the length resists; what is left resists with the yield strength");
     step!(w, "EN 1993-1-5 6.4(1), (6.3)", chi_F = min(0.5 / lambda_F, number(1.0)));
     step!(w, "EN 1993-1-5 6.2(1), (6.2)", L_eff = chi_F * l_y);
     step!(w, "EN 1993-1-5 6.2(1), (6.1)", F_Rd = f_y * L_eff * t_w / gamma_M1);
@@ -196,6 +198,9 @@ impl<N: Number> Web<N> {
                 l_y
             }
             Some(l_e) => {
+                w.say(
+                    "the force spreads through the flange; the least length counts, at most up to the stiffeners",
+                );
                 let l_y_10 = within(w);
                 let l_y_11 = w.line(
                     "EN 1993-1-5 6.5(3), (6.11)",
@@ -204,11 +209,11 @@ impl<N: Number> Web<N> {
                 );
                 let l_y_12 =
                     w.line("EN 1993-1-5 6.5(3), (6.12)", glossary::l_y.of("12"), l_e + t_f * (m_1 + m_2).root());
-                w.say("the least of these counts, at most the distance between stiffeners");
                 step!(w, "EN 1993-1-5 6.5(3)", l_y = min(min(min(l_y_10, l_y_11), l_y_12), a));
                 l_y
             }
         };
+        w.say("slenderness of the web");
         step!(w, "EN 1993-1-5 6.4(1), (6.4)", lambda_F = (l_y * t_w * f_y / F_cr).root());
         (l_y, lambda_F)
     }

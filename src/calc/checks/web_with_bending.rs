@@ -32,6 +32,7 @@ pub(super) fn check<N: Number, W: Workings<N>>(w: &mut W, inputs: &WebWithBendin
     let (F_Ed, F_Rd) = force_and_resistance(w, &inputs.web, &bent.yielding);
     let M_Ed = size(w, &inputs.moment, &MOMENT);
     let (f_y, W_el_y, gamma_M0) = (bent.yielding.f_y, bent.yielding.profile.W_el_y, bent.gamma_M0);
+    w.say("the share of the force and four fifths of the share of the moment together stay below 1.4");
     step!(w, "EN 1993-1-5 7.2(1)", eta_2 = F_Ed / F_Rd);
     step!(w, "EN 1993-1-5 4.6(1)", eta_1 = M_Ed / (W_el_y * f_y / gamma_M0));
     step!(w, "EN 1993-1-5 7.2(1), (7.2)", eta = eta_2 + 0.8 * eta_1);
