@@ -22,7 +22,7 @@ pub struct Bending {
     pub moment: Combined<1, 1>,
 }
 
-pub(super) const MOMENT: Writing<1, 1> = Writing { whole: &glossary::M_Ed, part: &glossary::M, plural: "moments" };
+pub(super) const MOMENT: Writing<'_, 1, 1> = Writing::new(&glossary::M_Ed, &glossary::M, "moments");
 
 pub(super) fn check<N: Number, W: Workings<N>>(w: &mut W, inputs: &Bending) -> Outcome {
     let M_Ed = size(w, &inputs.moment, &MOMENT);

@@ -44,7 +44,7 @@ pub(super) fn check<N: Number, W: Workings<N>>(w: &mut W, inputs: &Deflection) -
         Movement::Stacked => &glossary::w_st,
         Movement::Tilt => &glossary::dw,
     };
-    let movement = size(w, &inputs.movement, &Writing { whole, part: &glossary::w, plural: "own movements" });
+    let movement = size(w, &inputs.movement, &Writing::new(whole, &glossary::w, "own movements"));
     let w_lim = limit::length(w, &inputs.limit, &inputs.stretch);
     let outcome = judge(w, "", movement, w_lim, CheckUnit::Length);
     let required = required(w, &inputs.second_moment, |w, I_y| {

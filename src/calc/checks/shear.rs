@@ -22,7 +22,7 @@ pub struct Shear {
     pub shear: Combined<1, 0>,
 }
 
-pub(super) const SHEAR: Writing<1, 0> = Writing { whole: &glossary::V_Ed, part: &glossary::V, plural: "shears" };
+pub(super) const SHEAR: Writing<'_, 1, 0> = Writing::new(&glossary::V_Ed, &glossary::V, "shears");
 
 pub(super) fn check<N: Number, W: Workings<N>>(w: &mut W, inputs: &Shear) -> Outcome {
     let V_Ed = size(w, &inputs.shear, &SHEAR);

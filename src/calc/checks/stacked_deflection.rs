@@ -69,7 +69,7 @@ pub struct HandRule {
 }
 
 pub(super) fn check<N: Number, W: Workings<N>>(w: &mut W, inputs: &StackedDeflection) -> Outcome {
-    let own = Writing { whole: &glossary::w_own, part: &glossary::w, plural: "own movements" };
+    let own = Writing::new(&glossary::w_own, &glossary::w, "own movements");
     let w_own = signed(w, &inputs.own, 1.0, &own);
     let w_inh = inherited(w, &inputs.inherited);
     let w_set = settled(w, inputs.settled);

@@ -23,8 +23,8 @@ pub struct Uplift {
 }
 
 pub(super) fn check<N: Number, W: Workings<N>>(w: &mut W, inputs: &Uplift) -> Outcome {
-    let least = Writing { whole: &glossary::R_min, part: &glossary::R, plural: "reactions" };
-    let lifting = Writing { whole: &glossary::R_up, part: &glossary::R, plural: "reactions" };
+    let least = Writing::new(&glossary::R_min, &glossary::R, "reactions");
+    let lifting = Writing::new(&glossary::R_up, &glossary::R, "reactions");
     let nothing = Outcome {
         demand: Some(0.0),
         capacity: Some(inputs.held_down.map_or(0.0, Force::si)),

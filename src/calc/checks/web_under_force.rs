@@ -57,7 +57,7 @@ pub enum StiffLength {
     Unknown,
 }
 
-const FORCE: Writing<1, 0> = Writing { whole: &glossary::F_Ed, part: &glossary::F, plural: "forces" };
+const FORCE: Writing<'_, 1, 0> = Writing::new(&glossary::F_Ed, &glossary::F, "forces");
 
 /// Said where the web alone does not resist the force.
 pub const STIFFENER: &str = "a transverse stiffener is required (EN 1993-1-5 9.4)";
@@ -125,7 +125,12 @@ fn resistance<N: Number, W: Workings<N>>(w: &mut W, inputs: &WebUnderForce, s: &
         "the slenderness is not above 0.5, so that the web has no part in spreading the force, and the length is found again",
     );
     if !slender {
-        let m_2 = w.looked_up("EN 1993-1-5 6.5(1), (6.9)", &glossary::m_2, Ratio::from_si(0.0), "the web has no part in spreading the force");
+        let m_2 = w.looked_up(
+            "EN 1993-1-5 6.5(1), (6.9)",
+            &glossary::m_2,
+            Ratio::from_si(0.0),
+            "the web has no part in spreading the force",
+        );
         (l_y, lambda_F) = web.slenderness(w, m_2);
     }
     w.say("the web buckles before all of the length resists; what is left resists with the yield strength");
@@ -194,6 +199,7 @@ impl<N: Number> Web<N> {
         };
         let l_y = match self.l_e {
             None => {
+                w.say("the force spreads through the flange, at most up to the stiffeners");
                 step!(w, "EN 1993-1-5 6.5(2), (6.10)", l_y = min(s_s + 2.0 * t_f * (1.0 + (m_1 + m_2).root()), a));
                 l_y
             }
