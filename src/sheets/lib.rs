@@ -10,6 +10,7 @@ pub mod logo;
 pub mod package;
 pub mod templates;
 pub mod world;
+pub mod writers;
 
 mod data;
 mod export;
