@@ -1,6 +1,7 @@
 //! A job solved: the answers of the building to every contribution, and the effects at any place of any beam.
 
 use super::actions::Combinations;
+use super::element::Side;
 use super::job::{Action, Job, Load, Support};
 use super::search::{Sample, Stretch};
 use super::solve::{Answer, Contribution, Frame, contributions};
@@ -65,14 +66,14 @@ impl Building {
             Some(line) => line.movement,
             None => {
                 let element = &self.frame.elements[beam][node - 1];
-                element.at(&answer.lines[beam][node - 1], element.length)[2]
+                element.at(&answer.lines[beam][node - 1], element.length, Side::Before)[2]
             }
         };
         BearingMovement { under: self.answers.iter().map(of).collect(), settled: of(&self.settled) }
     }
 
     /// All effects at one place, seen from the element given.
-    pub(super) fn sample(&self, beam: usize, element: usize, x: f64) -> Sample {
+    pub(super) fn sample(&self, beam: usize, element: usize, x: f64, side: Side) -> Sample {
         let bearings = &self.job.beams[beam].bearings;
         let within = x - self.frame.nodes[beam][element];
         let span = self.span_at(beam, x);
@@ -87,10 +88,10 @@ impl Building {
             moment: Vec::with_capacity(count),
             movement: Vec::with_capacity(count),
             chord: Vec::with_capacity(count),
-            settled: shape.at(&self.settled.lines[beam][element], within)[2],
+            settled: shape.at(&self.settled.lines[beam][element], within, side)[2],
         };
         for (index, answer) in self.answers.iter().enumerate() {
-            let [shear, moment, movement] = shape.at(&answer.lines[beam][element], within);
+            let [shear, moment, movement] = shape.at(&answer.lines[beam][element], within, side);
             sample.shear.push(shear);
             sample.moment.push(moment);
             sample.movement.push(movement);

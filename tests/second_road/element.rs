@@ -6,14 +6,22 @@
 //! V0 and M0 follow from the movement and rotation that the nodes give at the far end. The stiffness of the element is
 //! its answer to unit movements of the nodes.
 
-/// A line load inside the element, x from its start. Point loads stand on nodes.
+/// A load inside the element, x from its start.
 #[derive(Clone, Copy, Debug)]
-pub struct Part {
-    pub from: f64,
-    pub to: f64,
-    pub start: f64,
-    pub end: f64,
+pub enum Part {
+    Line { from: f64, to: f64, start: f64, end: f64 },
+    Point { at: f64, force: f64 },
 }
+
+/// Which side of a point load is looked at where one stands at the very place.
+#[derive(Clone, Copy, Debug, PartialEq)]
+pub enum Side {
+    Before,
+    Beyond,
+}
+
+/// A place this close to a point load is the load's, m.
+const SAME_PLACE: f64 = 2e-9;
 
 #[derive(Clone, Copy, Debug)]
 pub struct Element {
@@ -34,7 +42,7 @@ pub struct Line {
 }
 
 /// The load integrated `order` times from the element's start to x.
-pub fn load_integral(parts: &[Part], x: f64, order: i32) -> f64 {
+pub fn load_integral(parts: &[Part], x: f64, side: Side, order: i32) -> f64 {
     // A bracket <x - a>^degree over degree factorial: each integration raises the degree by one.
     let bracket = |a: f64, degree: i32| {
         let mut value = if x > a { 1.0 } else { 0.0 };
@@ -43,17 +51,22 @@ pub fn load_integral(parts: &[Part], x: f64, order: i32) -> f64 {
         }
         value
     };
-    parts
-        .iter()
-        .map(|&Part { from, to, start, end }| {
+    let integral = |part: &Part| match *part {
+        Part::Line { from, to, start, end } => {
             let slope = (end - start) / (to - from);
             let mut sum = start * bracket(from, order) - end * bracket(to, order);
             if slope != 0.0 {
                 sum += slope * (bracket(from, order + 1) - bracket(to, order + 1));
             }
             sum
-        })
-        .sum()
+        }
+        Part::Point { at, force } if order == 1 => {
+            let passed = if (x - at).abs() <= SAME_PLACE { side == Side::Beyond } else { x > at };
+            if passed { force } else { 0.0 }
+        }
+        Part::Point { at, force } => force * bracket(at, order - 1),
+    };
+    parts.iter().map(integral).sum()
 }
 
 impl Element {
@@ -63,7 +76,7 @@ impl Element {
         let (m, m1, m2) = match parts.is_empty() {
             true => (0.0, 0.0, 0.0),
             false => {
-                let integral = |order| load_integral(&parts, length, order);
+                let integral = |order| load_integral(&parts, length, Side::Before, order);
                 (integral(2), integral(3), integral(4))
             }
         };
@@ -79,13 +92,13 @@ impl Element {
     }
 
     /// Shear, moment and movement at x.
-    pub fn at(&self, line: &Line, x: f64) -> [f64; 3] {
+    pub fn at(&self, line: &Line, x: f64, side: Side) -> [f64; 3] {
         let (mut shear, mut moment) = (line.shear, line.moment + line.shear * x);
         let mut twice = x * x * (line.moment / 2.0 + line.shear * x / 6.0);
         if !line.parts.is_empty() {
-            shear -= load_integral(&line.parts, x, 1);
-            moment -= load_integral(&line.parts, x, 2);
-            twice -= load_integral(&line.parts, x, 4);
+            shear -= load_integral(&line.parts, x, side, 1);
+            moment -= load_integral(&line.parts, x, side, 2);
+            twice -= load_integral(&line.parts, x, side, 4);
         }
         let movement =
             line.movement + line.rotation * x - twice / self.bending + (moment - line.moment) * self.shear_softness;
@@ -94,7 +107,7 @@ impl Element {
 
     /// Forces that the element puts on its nodes' freedoms [w, phi, w, phi] when they move: the resisting forces.
     pub fn forces(&self, line: &Line) -> [f64; 4] {
-        let [shear, moment, _] = self.at(line, self.length);
+        let [shear, moment, _] = self.at(line, self.length, Side::Before);
         [-line.shear, line.moment, shear, -moment]
     }
 
@@ -130,18 +143,19 @@ fn stiffness_is_the_textbooks() {
 }
 
 /// Handbooks: a span fixed at both ends: wL^2/12 under a uniform load, 11 and 5 wL^2/192 where it covers the first half,
-/// wL^2/30 and wL^2/20 under a triangle that rises from zero.
+/// Pab^2/L^2 and Pa^2b/L^2 under a point load, wL^2/30 and wL^2/20 under a triangle that rises from zero.
 #[test]
 fn fixed_end_moments_are_the_handbooks() {
     let element = Element { length: 4.0, bending: 1.0e6, shear_softness: 0.0 };
     let ends = |part: Part| {
         let line = element.line([0.0; 2], [0.0; 2], vec![part]);
-        [line.moment, element.at(&line, 4.0)[1]]
+        [line.moment, element.at(&line, 4.0, Side::Before)[1]]
     };
     for (part, expected) in [
-        (Part { from: 0.0, to: 4.0, start: 6.0, end: 6.0 }, [-8.0, -8.0]),
-        (Part { from: 0.0, to: 2.0, start: 6.0, end: 6.0 }, [-11.0 * 96.0 / 192.0, -5.0 * 96.0 / 192.0]),
-        (Part { from: 0.0, to: 4.0, start: 0.0, end: 6.0 }, [-6.0 * 16.0 / 30.0, -6.0 * 16.0 / 20.0]),
+        (Part::Line { from: 0.0, to: 4.0, start: 6.0, end: 6.0 }, [-8.0, -8.0]),
+        (Part::Line { from: 0.0, to: 2.0, start: 6.0, end: 6.0 }, [-11.0 * 96.0 / 192.0, -5.0 * 96.0 / 192.0]),
+        (Part::Point { at: 1.0, force: 8.0 }, [-8.0 * 9.0 / 16.0, -8.0 * 3.0 / 16.0]),
+        (Part::Line { from: 0.0, to: 4.0, start: 0.0, end: 6.0 }, [-6.0 * 16.0 / 30.0, -6.0 * 16.0 / 20.0]),
     ] {
         let found = ends(part);
         for side in 0..2 {

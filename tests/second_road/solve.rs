@@ -1,6 +1,6 @@
 //! Every beam of the building in one stiffness system, and the answer of all beams to each contribution of load.
 
-use super::element::{Element, Line, Part};
+use super::element::{Element, Line, Part, Side};
 use super::job::{Action, Job, Load, Support};
 use super::profile_matrix::{Factor, ProfileMatrix};
 use super::{SHEAR_MODULUS, YOUNG};
@@ -35,7 +35,8 @@ enum Freedom {
 }
 
 pub struct Frame {
-    /// Places of the nodes along each beam: bearings, landings, point loads, ends.
+    /// Places of the nodes along each beam: bearings, landings, ends. Loads are
+    /// exact inside an element, and a node close to another would cost figures.
     pub nodes: Vec<Vec<f64>>,
     pub elements: Vec<Vec<Element>>,
     freedoms: Vec<Vec<[Freedom; 2]>>,
@@ -195,12 +196,19 @@ impl Frame {
         let nodes = &self.nodes[beam];
         let mut parts = vec![Vec::new(); nodes.len() - 1];
         let mut nodal = vec![0.0; nodes.len()];
-        if let Load::Point { at, force } = load {
-            nodal[self.node(beam, at)] = force;
+        if let Load::Point { at, force } = load
+            && let Some(node) = nodes.iter().position(|node| (node - at).abs() <= SAME_PLACE)
+        {
+            nodal[node] = force;
+            return (parts, nodal);
         }
         for (index, ends) in nodes.windows(2).enumerate() {
-            if let Some(Load::Line { from, to, start, end }) = load.within(ends[0], ends[1]) {
-                parts[index].push(Part { from: from - ends[0], to: to - ends[0], start, end });
+            match load.within(ends[0], ends[1]) {
+                Some(Load::Line { from, to, start, end }) => {
+                    parts[index].push(Part::Line { from: from - ends[0], to: to - ends[0], start, end });
+                }
+                Some(Load::Point { at, force }) => parts[index].push(Part::Point { at: at - ends[0], force }),
+                None => {}
             }
         }
         (parts, nodal)
@@ -241,7 +249,7 @@ impl Frame {
                     0 => 0.0,
                     _ => {
                         let element = &self.elements[beam][node - 1];
-                        element.at(&lines[beam][node - 1], element.length)[0]
+                        element.at(&lines[beam][node - 1], element.length, Side::Before)[0]
                     }
                 };
                 let reaction = after - before + onto[beam][node];
@@ -264,10 +272,6 @@ impl Frame {
 fn nodes_of(job: &Job, beam: usize) -> Vec<f64> {
     let mut nodes = vec![0.0, job.beams[beam].length];
     nodes.extend(job.beams[beam].bearings.iter().map(|bearing| bearing.at));
-    nodes.extend(job.beams[beam].rows.iter().flat_map(|row| &row.loads).filter_map(|(_, load)| match load {
-        Load::Point { at, .. } => Some(*at),
-        Load::Line { .. } => None,
-    }));
     for other in &job.beams {
         for bearing in &other.bearings {
             if let Support::Beam(carrier, lands) = bearing.on
