@@ -12,7 +12,7 @@ use crate::actions::combinations::{Expression, Purpose, listed};
 use crate::actions::{Action, Category};
 use crate::quantity::{Q, Ratio};
 use crate::results::{Combinations, Effect, Part};
-use crate::workings::symbol::Entry;
+use crate::workings::symbol::{Entry, Symbol};
 use crate::workings::{Number, Workings, glossary};
 
 /// The parts of an effect and the expression that combines them.
@@ -56,12 +56,36 @@ impl<const FORCE: i8, const LENGTH: i8> Combined<FORCE, LENGTH> {
 }
 
 /// How a combined effect is written.
-pub(super) struct Writing<const FORCE: i8, const LENGTH: i8> {
+#[derive(Clone, Copy)]
+pub(super) struct Writing<'a, const FORCE: i8, const LENGTH: i8> {
     pub whole: &'static Entry<FORCE, LENGTH>,
     /// The effect of one action; its name becomes the subscript.
     pub part: &'static Entry<FORCE, LENGTH>,
     /// "moments": what is combined.
-    pub plural: &'static str,
+    pub plural: &'a str,
+    /// A subscript of its own for the whole.
+    pub sub: Option<&'a str>,
+}
+
+impl<'a, const F: i8, const L: i8> Writing<'a, F, L> {
+    pub const fn new(whole: &'static Entry<F, L>, part: &'static Entry<F, L>, plural: &'a str) -> Self {
+        Writing { whole, part, plural, sub: None }
+    }
+
+    fn symbol(&self) -> Symbol<'a, F, L> {
+        match self.sub {
+            Some(sub) => self.whole.of(sub),
+            None => self.whole.into(),
+        }
+    }
+
+    /// The symbol of the sum of the first terms.
+    fn so_far(&self, line: usize) -> Symbol<'static, F, L> {
+        match self.sub {
+            Some(sub) => self.whole.of(format!("{sub},{line}")),
+            None => self.whole.of(line.to_string()),
+        }
+    }
 }
 
 /// Terms in one line of the sum: more would not fit its column.
@@ -71,7 +95,7 @@ const TERMS_A_LINE: usize = 3;
 pub(super) fn size<N: Number, W: Workings<N>, const F: i8, const L: i8>(
     w: &mut W,
     combined: &Combined<F, L>,
-    writing: &Writing<F, L>,
+    writing: &Writing<'_, F, L>,
 ) -> Q<N, F, L> {
     let sign = if combined.value() < 0.0 { -1.0 } else { 1.0 };
     signed(w, combined, sign, writing)
@@ -82,12 +106,12 @@ pub(super) fn signed<N: Number, W: Workings<N>, const F: i8, const L: i8>(
     w: &mut W,
     combined: &Combined<F, L>,
     sign: f64,
-    writing: &Writing<F, L>,
+    writing: &Writing<'_, F, L>,
 ) -> Q<N, F, L> {
     let clause = combined.clause();
     if combined.parts.is_empty() {
         let nought = Q::from_si(0.0);
-        return w.looked_up(clause, writing.whole, nought, "no action contributes");
+        return w.looked_up(clause, writing.symbol(), nought, "no action contributes");
     }
     w.say(|| sentence(combined, sign, writing.plural));
     let mut sum: Option<Q<N, F, L>> = None;
@@ -98,15 +122,14 @@ pub(super) fn signed<N: Number, W: Workings<N>, const F: i8, const L: i8>(
         sum = Some(match sum {
             None => term,
             Some(sum) if place % TERMS_A_LINE == 0 => {
-                let lines_so_far = place / TERMS_A_LINE;
-                w.line(clause, writing.whole.of(lines_so_far.to_string()), sum) + term
+                w.line(clause, writing.so_far(place / TERMS_A_LINE), sum) + term
             }
             Some(sum) => sum + term,
         });
     }
     match sum {
-        Some(sum) => w.line(clause, writing.whole, sum),
-        None => w.given(writing.whole, Q::from_si(0.0)),
+        Some(sum) => w.line(clause, writing.symbol(), sum),
+        None => w.given(writing.symbol(), Q::from_si(0.0)),
     }
 }
 
@@ -205,7 +228,7 @@ fn sentence<const F: i8, const L: i8>(combined: &Combined<F, L>, sign: f64, plur
     };
     let (led, with) = (names(true), names(false));
     let mut words = match sign < 0.0 {
-        true => format!("The {plural} of each action are combined, turned so that the sum is positive."),
+        true => format!("The {plural} of each action are combined, their signs turned."),
         false => format!("The {plural} of each action are combined."),
     };
     let verb =

@@ -4,13 +4,18 @@
 // Checks carry the symbols of the standards (M_Ed, W_pl, A_v), so that they read like the clause.
 #![allow(non_snake_case)]
 
+pub mod account;
 pub mod bending;
 pub mod bending_with_shear;
 pub mod combined;
 pub mod deflection;
+mod example;
+pub mod generated;
 pub mod inputs;
 pub mod lateral_torsional_buckling;
 pub mod limit;
+pub mod places;
+pub mod registry;
 mod section;
 pub mod shear;
 pub mod stacked_deflection;
@@ -20,6 +25,7 @@ pub mod uplift;
 pub mod web_under_force;
 pub mod web_with_bending;
 
+pub use account::account;
 pub use bending_with_shear::Reduced;
 pub use combined::Combined;
 pub use inputs::{Inputs, Steel};

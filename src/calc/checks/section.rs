@@ -83,7 +83,7 @@ pub(super) fn yielding<N: Number, W: Workings<N>>(w: &mut W, steel: &Steel) -> R
     w.say(move || format!("The thicker of flange and web decides the row of {grade}: up to {up_to:.0} mm."));
     step!(w, clause, t = max(t_f, t_w));
     let _ = t;
-    let f_y = w.looked_up(clause, &glossary::f_y, row.strength, "yield strength");
+    let f_y = w.looked_up(clause, &glossary::f_y, row.strength, "");
     step!(w, "EN 1993-1-1 Table 5.2", epsilon = (235.0 / f_y.measured_in(Unit::NPerMm2)).root());
     Ok(Yielding { profile, f_y, epsilon })
 }
@@ -186,7 +186,15 @@ pub(super) fn sheared<N: Number, W: Workings<N>>(w: &mut W, steel: &Steel) -> Re
     let h_w = stocky_web(w, &s)?;
     let A = w.given(&glossary::A, steel.section.area);
     let gamma_M0 = w.given(&glossary::gamma_M0, Ratio::from_si(steel.choices.gamma_m()));
-    step!(w, "EN 1993-1-1 6.2.6(3)a", A_v = max(A - 2.0 * b * t_f + (t_w + 2.0 * r) * t_f, 1.0 * h_w * t_w));
+    w.say("the shear area is the web with the roots of the flanges");
+    step!(w, "EN 1993-1-1 6.2.6(3)a", A_v = A - 2.0 * b * t_f + (t_w + 2.0 * r) * t_f);
+    let whole = w.when(
+        "EN 1993-1-1 6.2.6(3)a",
+        (h_w * t_w).at_most(A_v),
+        "it is no less than the web between the flanges",
+        "it is less than the web between the flanges, which counts instead",
+    );
+    let A_v = if whole { A_v } else { w.line("EN 1993-1-1 6.2.6(3)a", &glossary::A_v, h_w * t_w) };
     let root_3 = crate::quantity::constant(&crate::workings::number::ROOT_3);
     step!(w, "EN 1993-1-1 6.2.6(2), (6.18)", V_pl_Rd = A_v * s.f_y / (root_3 * gamma_M0));
     Ok(Sheared { h_w, V_pl_Rd })

@@ -15,10 +15,13 @@
 //!
 //! Worked example (by hand, test below): 254x146x37 UB in S275, seat of 150 mm at the beam's very end, length 4.80 m.
 
+use super::Inputs;
 use super::combined::{Writing, size};
+use super::example::two;
 use super::section::{Profile, Yielding, yielding};
 use super::{Combined, Outcome, Steel, judge, unverified};
 use crate::materials;
+use crate::materials::Grade;
 use crate::quantity::{Force, Length, Ratio, min, number};
 use crate::results::{CheckUnit, Verdict};
 use crate::workings::lines::step;
@@ -57,7 +60,7 @@ pub enum StiffLength {
     Unknown,
 }
 
-const FORCE: Writing<1, 0> = Writing { whole: &glossary::F_Ed, part: &glossary::F, plural: "forces" };
+const FORCE: Writing<'_, 1, 0> = Writing::new(&glossary::F_Ed, &glossary::F, "forces");
 
 /// Said where the web alone does not resist the force.
 pub const STIFFENER: &str = "a transverse stiffener is required (EN 1993-1-5 9.4)";
@@ -110,6 +113,7 @@ fn resistance<N: Number, W: Workings<N>>(w: &mut W, inputs: &WebUnderForce, s: &
             (k_F, Some(l_e))
         }
     };
+    w.say("critical force of the web");
     step!(w, "EN 1993-1-5 6.4(1), (6.5)", F_cr = 0.9 * k_F * E * t_w.cubed() / h_w);
     w.say("flange and web have one yield strength, which leaves their widths");
     step!(w, "EN 1993-1-5 6.5(1), (6.8)", m_1 = b / t_w);
@@ -120,13 +124,19 @@ fn resistance<N: Number, W: Workings<N>>(w: &mut W, inputs: &WebUnderForce, s: &
     let slender = w.when(
         "EN 1993-1-5 6.5(1), (6.9)",
         lambda_F.more_than(number(0.5)),
-        "the slenderness is above 0.5, so that m_2 stays",
-        "the slenderness is not above 0.5, so that m_2 is nought and the length is found again",
+        "the slenderness is above 0.5, so that the web keeps its part in spreading the force",
+        "the slenderness is not above 0.5, so that the web has no part in spreading the force, and the length is found again",
     );
     if !slender {
-        let m_2 = w.looked_up("EN 1993-1-5 6.5(1), (6.9)", &glossary::m_2, Ratio::from_si(0.0), "m_2 is nought");
+        let m_2 = w.looked_up(
+            "EN 1993-1-5 6.5(1), (6.9)",
+            &glossary::m_2,
+            Ratio::from_si(0.0),
+            "the web has no part in spreading the force",
+        );
         (l_y, lambda_F) = web.slenderness(w, m_2);
     }
+    w.say("the web buckles before all of the length resists; what is left resists with the yield strength");
     step!(w, "EN 1993-1-5 6.4(1), (6.3)", chi_F = min(0.5 / lambda_F, number(1.0)));
     step!(w, "EN 1993-1-5 6.2(1), (6.2)", L_eff = chi_F * l_y);
     step!(w, "EN 1993-1-5 6.2(1), (6.1)", F_Rd = f_y * L_eff * t_w / gamma_M1);
@@ -192,10 +202,14 @@ impl<N: Number> Web<N> {
         };
         let l_y = match self.l_e {
             None => {
+                w.say("the force spreads through the flange, at most up to the stiffeners");
                 step!(w, "EN 1993-1-5 6.5(2), (6.10)", l_y = min(s_s + 2.0 * t_f * (1.0 + (m_1 + m_2).root()), a));
                 l_y
             }
             Some(l_e) => {
+                w.say(
+                    "the force spreads through the flange; the least length counts, at most up to the stiffeners",
+                );
                 let l_y_10 = within(w);
                 let l_y_11 = w.line(
                     "EN 1993-1-5 6.5(3), (6.11)",
@@ -204,12 +218,42 @@ impl<N: Number> Web<N> {
                 );
                 let l_y_12 =
                     w.line("EN 1993-1-5 6.5(3), (6.12)", glossary::l_y.of("12"), l_e + t_f * (m_1 + m_2).root());
-                w.say("the least of these counts, at most the distance between stiffeners");
                 step!(w, "EN 1993-1-5 6.5(3)", l_y = min(min(min(l_y_10, l_y_11), l_y_12), a));
                 l_y
             }
         };
+        w.say("slenderness of the web");
         step!(w, "EN 1993-1-5 6.4(1), (6.4)", lambda_F = (l_y * t_w * f_y / F_cr).root());
         (l_y, lambda_F)
+    }
+}
+
+/// The worked example above.
+pub fn example() -> Inputs {
+    Inputs::WebUnderForce(WebUnderForce {
+        steel: Steel::named("254x146x37 UB", Grade::S275),
+        force: two(20e3, 10e3),
+        way: Way::AtEnd { c: Length::mm(0.0) },
+        stiff: StiffLength::Seat(Length::mm(150.0)),
+        a: Length::m(4.8),
+    })
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+    use crate::checks::example::near;
+    use crate::checks::run;
+
+    #[test]
+    fn worked_example() {
+        // By hand, in N and mm: h_w = 256.0 - 21.8 = 234.2; k_F = 2 + 6 * 150 / 234.2 = 5.843 (not above 6);
+        // l_e = 5.843 * 210000 * 6.3^2 / (2 * 275 * 234.2) = 378 > 150, so 150; m_1 = 146.4 / 6.3 = 23.24;
+        // m_2 = 0.02 * (234.2 / 10.9)^2 = 9.23; (6.12): l_y = 150 + 10.9 * sqrt(32.47) = 212.1, the least;
+        // F_cr = 0.9 * 5.843 * 210000 * 6.3^3 / 234.2 = 1 179 000; lambda_F = sqrt(212.1 * 6.3 * 275 / 1179000) = 0.558;
+        // chi_F = 0.5 / 0.558 = 0.896; F_Rd = 0.896 * 212.1 * 6.3 * 275 = 329 kN.
+        let outcome = run(&example());
+        near(outcome.capacity, 329e3, 0.002);
+        near(outcome.demand, 42e3, 1e-12);
     }
 }

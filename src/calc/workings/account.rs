@@ -26,6 +26,7 @@ pub struct Line {
     /// From 1, through all chapters.
     pub number: u32,
     pub sentence: String,
+    /// Clauses of its steps, joined by "; ". A standard is named where it changes within a chapter.
     pub clause: String,
     pub steps: Vec<Step>,
     /// Lines of earlier chapters whose results it uses.
@@ -86,18 +87,39 @@ struct Writer<'a> {
     given_by: Vec<Option<(u32, usize)>>,
     numbered: u32,
     group: u32,
+    /// The standard that the chapter named last.
+    standard: String,
+    /// Clauses of the line in hand, in full.
+    clauses: Vec<String>,
+}
+
+/// "EN 1993-1-1" and the rest of a clause.
+fn standard(clause: &str) -> Option<(&str, &str)> {
+    let rest = clause.strip_prefix("EN ")?;
+    let (number, rest) = rest.split_once(' ')?;
+    Some((clause.get(..number.len() + 3)?, rest))
 }
 
 impl<'a> Writer<'a> {
     fn new(state: &'a State, figures: &'a Figures) -> Self {
         let given_by = vec![None; state.variables.len()];
-        Writer { state, figures, account: Account::default(), given_by, numbered: 0, group: 0 }
+        Writer {
+            state,
+            figures,
+            account: Account::default(),
+            given_by,
+            numbered: 0,
+            group: 0,
+            standard: String::new(),
+            clauses: vec![],
+        }
     }
 
     fn write(mut self) -> Account {
         for (at, record) in self.state.records.iter().enumerate() {
             if record.what == What::Chapter {
                 self.account.chapters.push(Chapter { heading: record.sentence.clone(), lines: vec![] });
+                self.standard.clear();
                 continue;
             }
             if self.account.chapters.is_empty() {
@@ -110,11 +132,12 @@ impl<'a> Writer<'a> {
                 let line = Line {
                     number: self.numbered,
                     sentence: record.sentence.clone(),
-                    clause: record.clause.clone(),
+                    clause: String::new(),
                     steps: vec![],
                     from: vec![],
                 };
                 self.account.chapters[chapter].lines.push(line);
+                self.clauses.clear();
             }
             let from = self.sources(&record.what, chapter);
             let step = self.step(at, &record.what);
@@ -122,10 +145,24 @@ impl<'a> Writer<'a> {
                 self.given_by[variable] = Some((self.numbered, chapter));
             }
             if let Some(line) = self.account.chapters[chapter].lines.last_mut() {
-                if line.clause.is_empty() {
-                    line.clause = record.clause.clone();
-                } else if !record.clause.is_empty() && !line.clause.split("; ").any(|c| c == record.clause) {
-                    line.clause = format!("{}; {}", line.clause, record.clause);
+                let shown = match standard(&record.clause) {
+                    Some((standard, rest)) if standard == self.standard => rest,
+                    Some((standard, _)) => {
+                        self.standard = standard.to_string();
+                        &record.clause
+                    }
+                    None => &record.clause,
+                };
+                if !self.clauses.iter().any(|c| {
+                    c == &record.clause
+                        || c.starts_with(&format!("{}(", record.clause))
+                        || c.starts_with(&format!("{},", record.clause))
+                }) {
+                    if !line.clause.is_empty() && !shown.is_empty() {
+                        line.clause.push_str("; ");
+                    }
+                    line.clause.push_str(shown);
+                    self.clauses.push(record.clause.clone());
                 }
                 line.from.extend(from.into_iter().filter(|n| *n != line.number));
                 line.from.sort_unstable();

@@ -148,7 +148,7 @@ glossary! {
 
 #[cfg(test)]
 mod tests {
-    use super::*;
+    use super::{ALL, DIMENSIONS, Info};
 
     #[test]
     fn every_entry_says_what_it_is() {
@@ -163,9 +163,9 @@ mod tests {
     #[test]
     fn two_symbols_are_written_alike_only_where_they_belong_to_different_beams() {
         let crossing = |name: &str| name.ends_with("_above");
-        for (name, info) in ALL.iter().filter(|(n, _)| !crossing(n)) {
+        for (name, info) in ALL.iter().filter(|(other, _)| !crossing(other)) {
             let alike = |(_, other): &&(&str, &Info)| (other.base, other.sub) == (info.base, info.sub);
-            let twins = ALL.iter().filter(|(n, _)| !crossing(n)).filter(alike).count();
+            let twins = ALL.iter().filter(|(other, _)| !crossing(other)).filter(alike).count();
             assert_eq!(twins, 1, "{name}");
         }
     }

@@ -49,7 +49,7 @@ pub trait Workings<N: Number> {
         origin: impl Words,
     ) -> Q<N, F, L>;
 
-    /// A number from a table; `why` is the sentence that says which row.
+    /// A number from a table; `why` is the sentence that says which row, empty where `say` has said it.
     fn looked_up<'a, const F: i8, const L: i8>(
         &mut self,
         clause: impl Words,
@@ -80,7 +80,7 @@ pub trait Workings<N: Number> {
         capacity: Q<N, F, L>,
     ) -> Requirement;
 
-    /// The sentence of the lines that follow, as long as they keep their clause.
+    /// The sentence of the results that follow, up to the next decision, result of a check or sentence.
     fn say(&mut self, words: impl Words);
 
     /// A sentence without a formula.
@@ -203,7 +203,7 @@ impl<'t> Workings<Traced<'t>> for &'t Tape {
         let node = self.with(|s| {
             let id = s.variable(named(&symbol, value.0));
             s.bind(id);
-            s.record(clause.words(), why.words(), What::Value { variable: id });
+            s.record(clause.words(), sentence(&why.words()), What::Value { variable: id });
             s.push(super::tape::Node::Variable(id), value.0, Dimension::of(F, L))
         });
         Q(Traced::node(value.0, node, self))
@@ -295,24 +295,32 @@ impl<'t> Workings<Traced<'t>> for &'t Tape {
 impl State {
     /// Puts a record where it belongs; one that stands already, unchanged, is not written twice.
     fn record(&mut self, clause: String, words: String, what: What) {
+        let opened = |open: &Option<(u32, String)>, records: &[Record]| {
+            open.as_ref().is_some_and(|(group, _)| records.last().is_some_and(|last| last.group == *group))
+        };
         if self.stands(&what, &clause) {
+            // What was said of it stands there too.
+            if !opened(&self.open, &self.records) {
+                self.open = None;
+            }
             return;
         }
-        let last = self.records.last();
-        let (group, sentence) = match (&what, &self.open, last) {
+        let joins = match what {
+            What::Equation { .. } | What::Requirement { .. } => true,
+            // A table's row has its own sentence, if any.
+            What::Value { .. } => words.is_empty(),
+            What::Chapter | What::Note | What::Comparison { .. } => false,
+        };
+        let (group, sentence) = match (&what, self.open.take(), self.records.last()) {
+            (_, Some((group, said)), _) if joins => {
+                self.open = Some((group, said.clone()));
+                (group, said)
+            }
             // The result of a check stands under the line that it follows from.
-            (What::Requirement { .. }, _, Some(last)) if !matches!(last.what, What::Chapter | What::Note) => {
+            (What::Requirement { .. }, None, Some(last)) if !matches!(last.what, What::Chapter | What::Note) => {
                 (last.group, last.sentence.clone())
             }
-            (What::Equation { .. } | What::Value { .. } | What::Requirement { .. }, Some((group, said)), _)
-                if !self.records.iter().any(|r| r.group == *group && r.clause != clause) =>
-            {
-                (*group, said.clone())
-            }
-            _ => {
-                self.open = None;
-                (self.next_group(), words)
-            }
+            _ => (self.next_group(), words),
         };
         if matches!(what, What::Requirement { .. }) {
             self.open = None;

@@ -1,0 +1,92 @@
+//! The account of a member: the workings of its governing checks, chapter by chapter, and of its reactions.
+
+use std::cmp::Ordering;
+
+use super::combined::{Combined, Writing, signed};
+use super::places::{carrier, heading};
+use super::workings;
+use crate::building::Building;
+use crate::results::{BeamResult, Check, CheckKind, Combinations, Results, Verdict};
+use crate::workings::account::Account;
+use crate::workings::{Tape, glossary};
+
+/// The workings of a beam: of each kind of check the worst entry, of webs every place, then the reactions.
+/// Empty where there is no such beam.
+pub fn account(building: &Building, results: &Results, beam: usize) -> Account {
+    let tape = Tape::new();
+    let Some(own) = results.beams.get(beam) else { return Account::default() };
+    let closest = closest(own);
+    for check in shown(own) {
+        let Some(inputs) = &check.inputs else { continue };
+        let mut head = heading(building, results, beam, check);
+        if closest.is_some_and(|closest| std::ptr::eq(closest, check))
+            && let Some(beam) = building.beams.get(beam)
+        {
+            head = format!("{head}: the closest check of {}", beam.mark);
+        }
+        tape.chapter(&head);
+        workings(inputs, &tape);
+    }
+    tape.chapter("Reactions");
+    reactions(building, own, &results.combinations, &tape);
+    Account::of(&tape)
+}
+
+/// The checks whose workings are shown, in the order of their names.
+pub fn shown(own: &BeamResult) -> Vec<&Check> {
+    let mut shown = Vec::new();
+    for kind in CheckKind::ALL {
+        let of_kind = own.checks.iter().filter(|c| c.kind == kind && !c.advice);
+        match kind {
+            CheckKind::WebUnderForce | CheckKind::WebWithBending | CheckKind::Torsion => shown.extend(of_kind),
+            CheckKind::Bending
+            | CheckKind::Shear
+            | CheckKind::BendingWithShear
+            | CheckKind::LateralTorsionalBuckling
+            | CheckKind::Uplift
+            | CheckKind::TotalDeflection
+            | CheckKind::AfterDeflection
+            | CheckKind::VariableDeflection
+            | CheckKind::StackedDeflection
+            | CheckKind::Tilt => shown.extend(of_kind.reduce(worse)),
+        }
+    }
+    shown
+}
+
+/// The check that decides a beam: the greatest share of those not met, else the first not verified, else the greatest
+/// share. None without checks.
+pub fn closest(own: &BeamResult) -> Option<&Check> {
+    own.checks.iter().filter(|c| !c.advice).reduce(worse)
+}
+
+/// The worse of two; the first where they are alike.
+fn worse<'a>(one: &'a Check, other: &'a Check) -> &'a Check {
+    let by_verdict = one.verdict.cmp(&other.verdict);
+    // Not met without a utilisation (nothing holds down what lifts) is the worst there is.
+    let share = |c: &Check| c.utilisation.unwrap_or(f64::INFINITY);
+    let order = match (by_verdict, one.verdict) {
+        (Ordering::Equal, Verdict::NotVerified) => Ordering::Equal,
+        (Ordering::Equal, _) => share(one).total_cmp(&share(other)),
+        (order, _) => order,
+    };
+    if order == Ordering::Less { other } else { one }
+}
+
+/// R_Ed and R_k of every bearing, from the reactions of each action.
+fn reactions(building: &Building, own: &BeamResult, combinations: &Combinations, mut tape: &Tape) {
+    let w = &mut tape;
+    for (place, bearing) in own.bearings.iter().enumerate() {
+        let sub = (place + 1).to_string();
+        let at = carrier(building, bearing.on);
+        let plural = format!("reactions at {at}, bearing {sub},");
+        let design = Writing { whole: &glossary::R_Ed, part: &glossary::R, plural: &plural, sub: Some(&sub) };
+        if let Some(combined) = Combined::of(&bearing.design_max, combinations) {
+            signed(w, &combined, 1.0, &design);
+        }
+        let characteristic = Writing { whole: &glossary::R_k, ..design };
+        if let Some(combined) = Combined::of(&bearing.characteristic_max, combinations) {
+            signed(w, &combined, 1.0, &characteristic);
+        }
+    }
+}
