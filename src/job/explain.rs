@@ -28,7 +28,12 @@ pub(super) fn carriers_loop(steps: &[LoopStep], origins: &Origins, source: &Sour
     let last = (0..steps.len()).max_by_key(|at| place(&steps[*at])).unwrap_or(0);
     let turned: Vec<&LoopStep> = steps.iter().cycle().skip(last + 1).take(steps.len()).collect();
     let Some((closing, before)) = turned.split_last() else {
-        return Fault::new(Name::CarriersLoop, None, "a loop of beams", "let one of them stand on a wall or a post");
+        return Fault::new(
+            Name::CarriersLoop,
+            None,
+            "a loop of beams",
+            "let one of them stand on a wall or a post",
+        );
     };
     let line = |step: &LoopStep| match origins.span(step.bearing) {
         Some(span) => format!("{} on {} ({})", step.mark, step.on, source.line_of(span.start)),

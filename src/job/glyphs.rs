@@ -69,7 +69,8 @@ mod tests {
         for c in "aÄß×²°−–…€½Ωж\u{a0}\u{301}".chars() {
             assert!(printable(c), "{c:?}");
         }
-        for c in "\0\u{1b}\t\n\u{ad}\u{200b}\u{202e}\u{2066}\u{feff}\u{e000}\u{f6d7}אب水\u{1f3e0}\u{10ffff}".chars() {
+        for c in "\0\u{1b}\t\n\u{ad}\u{200b}\u{202e}\u{2066}\u{feff}\u{e000}\u{f6d7}אب水\u{1f3e0}\u{10ffff}".chars()
+        {
             assert!(!printable(c), "{c:?}");
         }
         assert!(printable(REPLACEMENT));

@@ -22,9 +22,8 @@ const MOST_MEMORY: u64 = 128 * 1024 * 1024;
 /// A path that stays inside the job's folder, on every system.
 pub(super) fn named(item: &Item, found: &mut Findings) -> Option<Logo> {
     let text = item.reference(found)?;
-    let outside = |remedy: &str| {
-        item.fault(Name::LogoOutsideFolder, "logo is not a path inside the job's folder", remedy)
-    };
+    let outside =
+        |remedy: &str| item.fault(Name::LogoOutsideFolder, "logo is not a path inside the job's folder", remedy);
     let parts: Vec<&str> = text.split('/').collect();
     let odd = |part: &&str| part.is_empty() || matches!(*part, "." | "..") || part.trim() != *part;
     let foreign = text.contains(['\\', ':']) || text.chars().any(char::is_control);
@@ -66,7 +65,11 @@ fn read(folder: &Path, path: &str) -> Result<Picture, Trouble> {
         }
         Err(open::Plain::TooLarge) => return Err(too_large(format!("{path} is larger than 8 MiB"))),
         Err(open::Plain::Machine(error)) => {
-            return Err((Name::LogoMissing, format!("{path} cannot be opened: {}", error.kind()), "make it readable"));
+            return Err((
+                Name::LogoMissing,
+                format!("{path} cannot be opened: {}", error.kind()),
+                "make it readable",
+            ));
         }
     };
     let reader = || ImageReader::new(Cursor::new(bytes.as_slice())).with_guessed_format();

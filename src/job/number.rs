@@ -82,7 +82,11 @@ pub fn scan(text: &str) -> Result<Scanned<'_>, Trouble> {
             return Err(Trouble::ThousandsMark { meant, or: None, unit: unit_text() });
         }
         if looks_like_thousands(&unmarked, ',') {
-            return Err(Trouble::ThousandsMark { meant: number(plain(&unmarked)), or: Some(meant), unit: unit_text() });
+            return Err(Trouble::ThousandsMark {
+                meant: number(plain(&unmarked)),
+                or: Some(meant),
+                unit: unit_text(),
+            });
         }
         return Err(Trouble::DecimalComma { meant, unit: unit_text() });
     }
@@ -180,7 +184,9 @@ mod tests {
         let meant = |text: &str| match scan(text).err() {
             Some(Trouble::DecimalComma { meant, .. }) => format!("comma {}", meant.text()),
             Some(Trouble::ThousandsMark { meant, or: None, .. }) => format!("mark {}", meant.text()),
-            Some(Trouble::ThousandsMark { meant, or: Some(or), .. }) => format!("mark {} {}", meant.text(), or.text()),
+            Some(Trouble::ThousandsMark { meant, or: Some(or), .. }) => {
+                format!("mark {} {}", meant.text(), or.text())
+            }
             Some(Trouble::NotANumber(_)) => "none".into(),
             _ => "plain".into(),
         };

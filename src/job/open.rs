@@ -33,7 +33,8 @@ pub fn open(path: &Path) -> Result<Reading, Machine> {
         Some(parent) if !parent.as_os_str().is_empty() => parent.to_path_buf(),
         _ => PathBuf::from("."),
     };
-    let refused = |name, fact: String, remedy: &str| Ok(Reading::refused(&shown, Fault::new(name, None, fact, remedy)));
+    let refused =
+        |name, fact: String, remedy: &str| Ok(Reading::refused(&shown, Fault::new(name, None, fact, remedy)));
     let Some(name) = file.file_name() else {
         return refused(Name::FileMissing, "this is no file".into(), "give a job's folder or its job.toml");
     };

@@ -104,18 +104,18 @@ fn fault(error: &Error, span: Span, text: &str, found: &Findings) -> Fault {
             let bare = part.trim().trim_matches(['"', '\'', '“', '”', '‘', '’', '«', '»']);
             match bare.contains(['"', '\\', '\n']) || bare.chars().count() > 60 {
                 true => syntax("a text without quotes", "put it in double quotes".into()),
-                false => syntax("a text without quotes", format!("write \"{bare}\""))
-                    .replaced_by(format!("\"{bare}\"")),
+                false => {
+                    syntax("a text without quotes", format!("write \"{bare}\"")).replaced_by(format!("\"{bare}\""))
+                }
             }
         }
         "invalid basic string" | "invalid literal string" if expected == "`\"`" || expected == "`'`" => {
             syntax("a text that does not end on its line", "close it with a double quote".into())
         }
         "key with no value" => syntax("a key without =", "write key = value; a key has no blanks".into()),
-        "missing escaped value" => syntax(
-            "a backslash that escapes nothing",
-            "write two backslashes, or take it out".into(),
-        ),
+        "missing escaped value" => {
+            syntax("a backslash that escapes nothing", "write two backslashes, or take it out".into())
+        }
         "unclosed table" | "unclosed array table" => {
             syntax("a line [ that is not closed", "close it as it was opened, with ] or ]]".into())
         }
@@ -124,9 +124,7 @@ fn fault(error: &Error, span: Span, text: &str, found: &Findings) -> Fault {
         "missing comma between array elements" | "missing comma between key-value pairs" => {
             syntax("a comma is missing", "put a comma before this".into())
         }
-        "extra comma in array" | "extra comma in inline table" => {
-            syntax("a comma too many", "take it out".into())
-        }
+        "extra comma in array" | "extra comma in inline table" => syntax("a comma too many", "take it out".into()),
         "invalid date" => syntax("a date that does not exist", format!("give a {}", expected.trim())),
         other if expected.is_empty() => syntax(&lower(other), "mend or take out this part".into()),
         other => syntax(&lower(other), format!("here can stand {}", expected.replace('`', ""))),
@@ -142,8 +140,13 @@ fn twice(span: Span, part: &str, found: &Findings) -> Fault {
     match first_of(span.start, part, found.source.text()) {
         Some(first) => {
             let line = found.line(&first);
-            Fault::new(Name::KeyTwice, Some(span), fact, format!("keep one of the two, the first is on line {line}"))
-                .with(first)
+            Fault::new(
+                Name::KeyTwice,
+                Some(span),
+                fact,
+                format!("keep one of the two, the first is on line {line}"),
+            )
+            .with(first)
         }
         None => Fault::new(Name::KeyTwice, Some(span), fact, "keep one of the two"),
     }

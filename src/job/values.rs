@@ -233,9 +233,11 @@ impl<'t> Item<'t> {
                 let fact = format!("{key} is not measured in {unit}");
                 self.fault(Name::UnitWrong, fact, format!("give it in {}", either(units)))
             }
-            Trouble::DecimalComma { meant, unit } => {
-                self.offered(Name::DecimalComma, "a decimal comma in a quantity".into(), &repaired(&meant, &unit, bounds))
-            }
+            Trouble::DecimalComma { meant, unit } => self.offered(
+                Name::DecimalComma,
+                "a decimal comma in a quantity".into(),
+                &repaired(&meant, &unit, bounds),
+            ),
             Trouble::ThousandsMark { meant, or, unit } => {
                 let mut offers = repaired(&meant, &unit, bounds);
                 offers.extend(or.iter().flat_map(|number| repaired(number, &unit, bounds)));
@@ -349,7 +351,11 @@ fn name_trouble(text: &str) -> Option<(Name, String, String)> {
         return Some((Name::NameMalformed, "a mark or name of several lines".into(), remedy.into()));
     }
     if text.trim().is_empty() {
-        return Some((Name::NameMalformed, "a mark or name without a character".into(), "give 1 to 24 characters".into()));
+        return Some((
+            Name::NameMalformed,
+            "a mark or name without a character".into(),
+            "give 1 to 24 characters".into(),
+        ));
     }
     if !bounds::NAME_CHARACTERS.admit(length as f64) {
         let fact = format!("a mark or name of {length} characters");

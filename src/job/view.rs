@@ -71,8 +71,7 @@ impl<'t> Table<'t> {
         let mut typed: Vec<(&str, Span, &Value)> =
             table.iter().map(|(key, value)| (key.get_ref().as_ref(), key.span(), value)).collect();
         typed.sort_by_key(|(_, span, _)| span.start);
-        let mut view =
-            Table { keys, called: keys.title.to_string(), place, items: Vec::new(), meant: Vec::new() };
+        let mut view = Table { keys, called: keys.title.to_string(), place, items: Vec::new(), meant: Vec::new() };
         for (key, key_span, value) in typed {
             if let Some((name, _)) = keys.now.iter().find(|(name, _)| *name == key) {
                 view.items.push(Item { key: name, value: value.get_ref(), span: value.span(), key_span });

@@ -197,7 +197,7 @@ impl BeamEntry {
                 min: Figure(result.moment_min.value.to_knm()),
                 min_at_m: metres(result.moment_min.at),
             },
-            shear: Shear { max: Figure(result.shear.value.to_kn()), at_m: metres(result.shear.at) },
+            shear: Shear { max: Figure(result.shear.value.to_kn().abs()), at_m: metres(result.shear.at) },
             deflection_mm: Deflection {
                 own_total: movement(&m.own_total),
                 own_total_at_m: metres(m.own_total.at),

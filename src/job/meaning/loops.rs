@@ -33,10 +33,11 @@ pub(super) fn find(typed: &Typed, names: &Names, found: &mut Findings) {
         .beams
         .iter()
         .map(|beam| {
-            let on_beams = beam.bearings.iter().enumerate().filter_map(|(bearing, b)| match names.support(b.on.value()?)? {
-                Support::Beam(carrier) => Some(Edge { bearing, carrier }),
-                Support::Wall(_) | Support::Later => None,
-            });
+            let on_beams =
+                beam.bearings.iter().enumerate().filter_map(|(bearing, b)| match names.support(b.on.value()?)? {
+                    Support::Beam(carrier) => Some(Edge { bearing, carrier }),
+                    Support::Wall(_) | Support::Later => None,
+                });
             on_beams.collect()
         })
         .collect();

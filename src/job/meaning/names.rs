@@ -116,7 +116,12 @@ impl Names {
         if let ([one], true) = (near.as_slice(), is_near) {
             fault = fault.replaced_by(toml_text(one));
         }
-        fault.also = near.iter().take(3).filter_map(|n| known.iter().find(|at| at.value == *n)).map(|at| at.span.clone()).collect();
+        fault.also = near
+            .iter()
+            .take(3)
+            .filter_map(|n| known.iter().find(|at| at.value == *n))
+            .map(|at| at.span.clone())
+            .collect();
         found.add(fault);
     }
 }

@@ -143,7 +143,11 @@ mod tests {
             assert!(entry.text.len() <= 24, "{}", entry.text);
             assert_eq!(entry.meaning.matches(". ").count(), 1, "{}", entry.text);
             assert!(entry.meaning.ends_with('.'), "{}", entry.text);
-            assert!(!entry.wrong.is_empty() && !entry.right.is_empty() && entry.wrong != entry.right, "{}", entry.text);
+            assert!(
+                !entry.wrong.is_empty() && !entry.right.is_empty() && entry.wrong != entry.right,
+                "{}",
+                entry.text
+            );
         }
     }
 

@@ -116,7 +116,8 @@ fn section(item: &Item, found: &mut Findings) -> Option<&'static Section> {
     if let Some(section) = sections::find(&text) {
         return Some(section);
     }
-    let family: String = text.chars().filter(char::is_ascii_alphabetic).filter(|c| !matches!(c, 'x' | 'X')).collect();
+    let family: String =
+        text.chars().filter(char::is_ascii_alphabetic).filter(|c| !matches!(c, 'x' | 'X')).collect();
     if let Some(later) = LATER_FAMILIES.iter().find(|name| family.eq_ignore_ascii_case(name)) {
         let fact = format!("{later} sections are not in this version");
         found.add(item.fault(Name::NotInThisVersion, fact, "take a UB or a UC"));

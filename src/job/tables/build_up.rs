@@ -40,7 +40,12 @@ pub(super) fn read(table: &Table, found: &mut Findings) -> TypedBuildUp {
     if table.first_of(&parts).is_none() && !parts.iter().any(|key| table.hides(key)) {
         let called = name.value().map_or("this build-up".to_string(), Clone::clone);
         let fact = format!("{called} has no load");
-        found.add(Fault::new(Name::BuildUpEmpty, Some(table.place.clone()), fact, "add layers, imposed, snow or wind"));
+        found.add(Fault::new(
+            Name::BuildUpEmpty,
+            Some(table.place.clone()),
+            fact,
+            "add layers, imposed, snow or wind",
+        ));
     }
     let meant = || {
         Some(BuildUp {

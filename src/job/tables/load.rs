@@ -28,12 +28,20 @@ pub(crate) struct TypedLoad {
 }
 
 pub(crate) enum TypedKind {
-    Area { build_up: Field<String>, width: Option<(f64, f64)> },
-    Wall { build_up: Field<String>, height: Option<(f64, f64)> },
+    Area {
+        build_up: Field<String>,
+        width: Option<(f64, f64)>,
+    },
+    Wall {
+        build_up: Field<String>,
+        height: Option<(f64, f64)>,
+    },
     /// A line load, or a point load where the row has `at`.
     Direct(Actions),
     /// What it is meant to be is at fault.
-    Unclear { build_up: Field<String> },
+    Unclear {
+        build_up: Field<String>,
+    },
 }
 
 /// Actions given directly, SI.

@@ -89,12 +89,7 @@ pub(super) fn read(parsed: &Parsed, found: &mut Findings) -> Typed {
 }
 
 /// The tables of a list such as `[[beam]]`.
-pub(super) fn rows<'t>(
-    parent: &Table<'t>,
-    key: &str,
-    keys: &'static Keys,
-    found: &mut Findings,
-) -> Vec<Table<'t>> {
+pub(super) fn rows<'t>(parent: &Table<'t>, key: &str, keys: &'static Keys, found: &mut Findings) -> Vec<Table<'t>> {
     let Some(item) = parent.get(key) else { return Vec::new() };
     if let DeValue::Table(_) = item.value {
         let fact = format!("[{}] in single brackets", keys.title.trim_matches(['[', ']']));

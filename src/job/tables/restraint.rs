@@ -94,7 +94,12 @@ fn hold(item: &Item, found: &mut Findings) -> Option<TypedHold> {
         if pair[1].value.si <= pair[0].value.si {
             let fact = format!("{} does not lie beyond {}", pair[1].value.typed, pair[0].value.typed);
             let place = Some(pair[1].span.clone());
-            found.add(crate::job::fault::Fault::new(Name::NotIncreasing, place, fact, "list places along the beam"));
+            found.add(crate::job::fault::Fault::new(
+                Name::NotIncreasing,
+                place,
+                fact,
+                "list places along the beam",
+            ));
         }
     }
     Some(TypedHold::At(places))
