@@ -5,6 +5,7 @@
 //! What was typed (the TOML tree, places, words) stays in here; what it means leaves as a [`Job`].
 
 pub mod bounds;
+mod brackets;
 mod coverage;
 mod explain;
 mod fault;

@@ -80,20 +80,13 @@ pub enum Trouble {
     /// No number stands where one should; what stands there.
     NotANumber(String),
     /// A decimal comma; the number meant.
-    DecimalComma {
-        meant: Number,
-        unit: String,
-    },
+    DecimalComma { meant: Number, unit: String },
     /// A mark between thousands; the number meant, and what it would be if a decimal comma was.
-    ThousandsMark {
-        meant: Number,
-        or: Option<Number>,
-        unit: String,
-    },
+    ThousandsMark { meant: Number, or: Option<Number>, unit: String },
     UnitMissing(Number),
     /// Centimetres; the same in metres.
     Centimetre(Number),
-    UnitUnknown(String),
+    UnitUnknown(Number, String),
     UnitWrong(&'static str),
     /// Too large to be a number.
     Overflow(String),
@@ -109,7 +102,7 @@ pub fn read(text: &str, dimension: Dimension) -> Result<Quantity, Trouble> {
     let Some((spelling, found)) = unit_called(unit) else {
         return Err(match unit {
             "cm" if dimension == Length => Trouble::Centimetre(number.shifted(-2)),
-            _ => Trouble::UnitUnknown(unit.to_string()),
+            _ => Trouble::UnitUnknown(number, unit.to_string()),
         });
     };
     if !found.dimensions.contains(&dimension) {
@@ -209,10 +202,8 @@ mod tests {
 
     #[test]
     fn nothing_that_is_no_finite_number_passes() {
-        for text in
-            ["nan m", "inf m", "-inf m", "NaN mm", "infinity m", "about 5 m", "m", "", " ", "- m", ". m", "1e m"]
-        {
-            assert!(matches!(length(text), Err(Trouble::NotANumber(_) | Trouble::UnitUnknown(_))), "{text}");
+        for text in ["nan m", "inf m", "-inf m", "NaN mm", "infinity m", "about 5 m", "m", "", " ", "- m", ". m", "1e m"] {
+            assert!(matches!(length(text), Err(Trouble::NotANumber(_) | Trouble::UnitUnknown(..))), "{text}");
         }
         for text in ["1e400 m", "1e99999999999999999999 m", "-1e309 m"] {
             assert!(matches!(length(text), Err(Trouble::Overflow(_))), "{text}");
@@ -227,8 +218,8 @@ mod tests {
         assert!(matches!(length("5.2"), Err(Trouble::UnitMissing(_))));
         assert!(matches!(length("520 cm"), Err(Trouble::Centimetre(n)) if n.text() == "5.20"));
         assert!(matches!(length("5 kN"), Err(Trouble::UnitWrong("kN"))));
-        assert!(matches!(length("5 M"), Err(Trouble::UnitUnknown(_))));
-        assert!(matches!(length("5 m m"), Err(Trouble::UnitUnknown(_))));
+        assert!(matches!(length("5 M"), Err(Trouble::UnitUnknown(..))));
+        assert!(matches!(length("5 m m"), Err(Trouble::UnitUnknown(..))));
         assert_eq!(unit_meant("M", Length), Some("m"));
         assert_eq!(unit_meant("kn/m^2", AreaLoad), Some("kN/m2"));
         assert_eq!(unit_meant("kn", Length), None);

@@ -6,6 +6,7 @@ use toml::Spanned;
 use toml::de::{DeTable, Error};
 
 use super::fault::{Fault, Span};
+use super::brackets::unclosed;
 use super::findings::Findings;
 use super::registry::Name;
 
@@ -28,10 +29,16 @@ pub(super) fn parse<'t>(text: &'t str, found: &mut Findings) -> Parsed<'t> {
     errors.sort_by_key(|e| e.span().map(|s| s.start));
     let mut spoiled: Vec<Span> = Vec::new();
     let mut whole = true;
+    let open = unclosed(text);
     let mut last_line = 0;
     for error in &errors {
         let span = widened(text, error.span());
         let line = found.line(&span);
+        if let Some(open) = open.clone().filter(|open| span.start >= open.start) {
+            let fact = "a list that is not closed";
+            found.add(Fault::new(Name::Syntax, Some(open.clone()), fact, "close it with ] before the next key"));
+            return Parsed { root, spoiled: vec![open], whole: false };
+        }
         let structural = !about_one_value(error.message(), text, &span);
         if line != last_line || spoiled.is_empty() {
             found.add(fault(error, span.clone(), text, found));
@@ -48,14 +55,23 @@ pub(super) fn parse<'t>(text: &'t str, found: &mut Findings) -> Parsed<'t> {
 
 /// What the parser says of a single value, with the rest of the file read as it stands.
 fn about_one_value(message: &str, text: &str, span: &Span) -> bool {
-    let unquoted = message.starts_with("string values must be quoted");
-    (unquoted && !span.is_empty() && !text[span.clone()].contains(['=', '[', ']', '{', '}', '"', '\'']))
+    bare_word(message, &text[span.clone()]).is_some()
         || message == "duplicate key"
         || message.starts_with("invalid date")
         || message.starts_with("invalid datetime")
         || message.starts_with("unexpected leading zero")
         || message.starts_with("missing escaped value")
         || message.starts_with("redundant")
+}
+
+/// The word or figure that stands where only one in quotes can: what would stand between the quotes.
+fn bare_word<'t>(message: &str, part: &'t str) -> Option<&'t str> {
+    let scalars = ["invalid integer", "invalid float", "invalid boolean", "invalid number"];
+    let unquoted = message.starts_with("string values must be quoted");
+    let scalar = scalars.iter().any(|start| message.starts_with(start));
+    let bare = part.trim().trim_matches(['“', '”', '‘', '’', '«', '»', '„']);
+    let plain = !bare.is_empty() && !bare.contains(['=', '[', ']', '{', '}', '"', '\'', '\\', '\n']);
+    (plain && (unquoted || scalar)).then_some(bare)
 }
 
 /// A complaint at a point takes the character at that point, or the one before it at the end of a line.
@@ -100,14 +116,17 @@ fn fault(error: &Error, span: Span, text: &str, found: &Findings) -> Fault {
         "string values must be quoted" if part.trim().is_empty() => {
             syntax("a key without a value", "write a value behind the =".into())
         }
-        "string values must be quoted" => {
-            let bare = part.trim().trim_matches(['"', '\'', '“', '”', '‘', '’', '«', '»']);
-            match bare.contains(['"', '\\', '\n']) || bare.chars().count() > 60 {
+        _ if bare_word(message, part).is_some() => {
+            let bare = bare_word(message, part).unwrap_or_default();
+            match bare.chars().count() > 60 {
                 true => syntax("a text without quotes", "put it in double quotes".into()),
                 false => {
                     syntax("a text without quotes", format!("write \"{bare}\"")).replaced_by(format!("\"{bare}\""))
                 }
             }
+        }
+        "string values must be quoted" => {
+            syntax("a text without quotes", "put it in double quotes".into())
         }
         "invalid basic string" | "invalid literal string" if expected == "`\"`" || expected == "`'`" => {
             syntax("a text that does not end on its line", "close it with a double quote".into())

@@ -48,10 +48,8 @@ impl<'t> Item<'t> {
             DeValue::String(text) => Some(text.as_ref()),
             DeValue::Integer(_) | DeValue::Float(_) | DeValue::Datetime(_) | DeValue::Boolean(_) => {
                 let typed = format!("\"{}\"", found.source.slice(&self.span));
-                let fact = format!("{} is {}, not text", self.key, kind_in_words(self.value));
-                found.add(
-                    self.fault(Name::TypeWrong, fact, format!("write it in quotes: {typed}")).replaced_by(typed),
-                );
+                let fact = format!("{} is not in quotes", self.key);
+                found.add(self.fault(Name::TypeWrong, fact, format!("write {typed}")).replaced_by(typed));
                 None
             }
             DeValue::Array(_) | DeValue::Table(_) => {
@@ -195,7 +193,7 @@ impl<'t> Item<'t> {
         let load = matches!(bounds.dimension, Dimension::Force | Dimension::LineLoad | Dimension::AreaLoad);
         if negative && load && !bounds.signed() {
             let fact = format!("{} is negative", self.key);
-            return self.fault(Name::LoadNegative, fact, "give it positive, downward; only wind may be negative");
+            return self.fault(Name::LoadNegative, fact, "write it positive; only wind may be negative");
         }
         let fact = format!("{} is no {}", clipped(typed), bounds.name);
         self.fault(Name::OutOfBounds, fact, format!("give {}", bounds.range()))
@@ -222,10 +220,13 @@ impl<'t> Item<'t> {
                 let fact = format!("{key} is in centimetres");
                 self.fault(Name::UnitCentimetre, fact, format!("write {typed}")).replaced_by(typed)
             }
-            Trouble::UnitUnknown(unit) => {
+            Trouble::UnitUnknown(number, unit) => {
                 let fact = format!("no unit is called {}", quoted(&unit));
                 match quantity::unit_meant(&unit, bounds.dimension) {
-                    Some(meant) => self.fault(Name::UnitUnknown, fact, format!("write {meant}")),
+                    Some(meant) => {
+                        let typed = format!("\"{} {meant}\"", number.text());
+                        self.fault(Name::UnitUnknown, fact, format!("write {typed}")).replaced_by(typed)
+                    }
                     None => self.fault(Name::UnitUnknown, fact, format!("give {key} in {}", either(units))),
                 }
             }
@@ -316,7 +317,9 @@ pub(super) fn either<T: AsRef<str>>(words: &[T]) -> String {
         [one] => one.as_ref().to_string(),
         [head @ .., last] => {
             let head: Vec<&str> = head.iter().map(AsRef::as_ref).collect();
-            format!("{} or {}", head.join(", "), last.as_ref())
+            // Parts with commas of their own are kept apart by one more.
+            let or = if head.iter().any(|part| part.contains(", ")) { ", or" } else { " or" };
+            format!("{}{or} {}", head.join(", "), last.as_ref())
         }
     }
 }
@@ -329,10 +332,11 @@ fn clipped(text: &str) -> String {
 }
 
 fn replaced_glyphs(item: &Item, replaced: &[char]) -> Fault {
-    let named: Vec<String> = replaced.iter().take(3).map(|c| glyphs::named(*c)).collect();
-    let more = match replaced.len() {
-        0..=3 => String::new(),
-        all => format!(" and {} more", all - 3),
+    let shown = if replaced.len() > 3 { 1 } else { replaced.len() };
+    let named: Vec<String> = replaced.iter().take(shown).map(|c| glyphs::named(*c)).collect();
+    let more = match replaced.len() - shown {
+        0 => String::new(),
+        more => format!(" and {more} more"),
     };
     let fact = format!("{} holds {}{more}", item.key, named.join(", "));
     let blanks = replaced.iter().all(|c| matches!(c, '\n' | '\r' | '\t'));

@@ -89,16 +89,22 @@ impl<'t> Table<'t> {
         let near = nearest(key, self.keys.now.iter().map(|(name, _)| *name).filter(absent));
         let fact = format!("{} has no key of this name", self.keys.title);
         let fault = |remedy: String| Fault::new(Name::KeyUnknown, Some(span.clone()), fact.clone(), remedy);
-        let elsewhere: Vec<&str> = keys::tables_with(key, self.keys).map(|table| table.title).collect();
+        let elsewhere: Vec<&Keys> = keys::tables_with(key, self.keys).collect();
+        let is = |one: &Keys, other: &Keys| std::ptr::eq(one, other);
+        let of_the_beam = is(self.keys, &keys::LOAD) && elsewhere.iter().any(|table| is(table, &keys::BEAM));
         let fault = match (near.first(), elsewhere.as_slice()) {
             (Some(name), _) => {
                 self.meant.extend(self.keys.now.iter().map(|(n, _)| *n).filter(|n| n == name));
                 fault(format!("write {name}")).replaced_by(*name)
             }
-            (None, [one, ..]) => fault(format!("{key} belongs to {one}: move it there")),
+            (None, _) if of_the_beam => fault(format!("{key} belongs to [[beam]]: move it above [[beam.load]]")),
+            (None, [one, ..]) => fault(format!("{key} belongs to {}: move it there", one.title)),
             (None, []) => {
                 let known: Vec<&str> = self.keys.now.iter().map(|(name, _)| *name).collect();
-                fault(format!("take one of {}", known.join(", ")))
+                fault(match known.as_slice() {
+                    [one] => format!("take it out: the only key here is {one}"),
+                    several => format!("take one of {}", several.join(", ")),
+                })
             }
         };
         found.add(fault);
@@ -126,8 +132,12 @@ impl<'t> Table<'t> {
     pub fn require(&self, key: &str, found: &mut Findings) -> Option<&Item<'t>> {
         let item = self.get(key);
         if item.is_none() && !self.hides(key) {
-            let fact = format!("{} has no {key}", self.called);
-            let remedy = format!("add {}", self.keys.example(key));
+            let example = self.keys.example(key);
+            let fact = match example.starts_with('[') {
+                true => format!("{} has no {example}", self.called),
+                false => format!("{} has no {key}", self.called),
+            };
+            let remedy = format!("add {example}");
             found.add(Fault::new(Name::KeyMissing, Some(self.place.clone()), fact, remedy));
         }
         item
@@ -176,6 +186,9 @@ fn later(name: &str, keys: &Keys, span: Span) -> Fault {
         Name::NotInThisVersion,
         Some(span),
         format!("{name} is not in this version"),
-        format!("take it out of {}", keys.title),
+        match keys.title.starts_with('[') {
+            true => format!("take it out of {}", keys.title),
+            false => "take it out".to_string(),
+        },
     )
 }

@@ -84,7 +84,7 @@ fn places(beam: &TypedBeam, found: &mut Findings) -> Vec<Option<f64>> {
             Field::Absent if index == 0 => Some((0.0, "0 m".into(), bearing.place.clone())),
             Field::Absent if outer => length.map(|l| (l.si, l.typed.clone(), bearing.place.clone())),
             Field::Absent if beam.all_bearings => {
-                let fact = "a bearing between the others without its place";
+                let fact = "an inner bearing without its place";
                 let remedy = "add at, measured along this beam";
                 let place = tables::place_of(&bearing.on, &bearing.place);
                 found.add(Fault::new(Name::BearingPlaceMissing, Some(place), fact, remedy));

@@ -88,7 +88,7 @@ fn unused(typed: &Typed, names: &Names, found: &mut Findings) {
     }
     for (build_up, _) in typed.build_ups.iter().zip(used_build_ups).filter(|(_, used)| !used) {
         if let Some(name) = &build_up.name {
-            let fact = format!("no load is of {}", names::with_article(&name.value));
+            let fact = format!("no load uses {}", names::with_article(&name.value));
             let remedy = "use it in a [[beam.load]], or take it out";
             found.add(Fault::new(Name::BuildUpUnused, Some(name.span.clone()), fact, remedy));
         }

@@ -25,6 +25,9 @@ pub(super) struct Names {
     /// Names with their places, in the order of the file.
     support_places: Vec<At<String>>,
     build_up_places: Vec<At<String>>,
+    /// A wall or a beam lacks a readable name, or is hidden behind a slip of the pen.
+    supports_hidden: bool,
+    build_ups_hidden: bool,
 }
 
 impl Names {
@@ -43,6 +46,10 @@ impl Names {
             build_ups: HashMap::new(),
             support_places: Vec::new(),
             build_up_places: Vec::new(),
+            supports_hidden: typed.supports_hidden
+                || typed.walls.iter().any(|wall| wall.known_as.is_none())
+                || typed.beams.iter().any(|beam| beam.known_as.is_none()),
+            build_ups_hidden: typed.build_ups_hidden || typed.build_ups.iter().any(|b| b.name.is_none()),
         };
         let mut first: HashMap<String, usize> = HashMap::new();
         for (name, support) in owners {
@@ -85,20 +92,29 @@ impl Names {
     }
 
     pub fn unknown_support(&self, typed: &At<String>, found: &mut Findings) {
-        let fact = "no wall, beam or post has this name";
-        self.unknown(Name::NameUnknown, fact, typed, &self.support_places, found);
+        self.unknown(Name::NameUnknown, typed, found);
     }
 
     pub fn unknown_build_up(&self, typed: &At<String>, found: &mut Findings) {
-        self.unknown(Name::BuildUpUnknown, "no build-up has this name", typed, &self.build_up_places, found);
+        self.unknown(Name::BuildUpUnknown, typed, found);
     }
 
-    fn unknown(&self, name: Name, fact: &str, typed: &At<String>, known: &[At<String>], found: &mut Findings) {
+    fn unknown(&self, name: Name, typed: &At<String>, found: &mut Findings) {
+        let (fact, known, hidden) = match name {
+            Name::BuildUpUnknown => {
+                ("no build-up has this name", &self.build_up_places, self.build_ups_hidden)
+            }
+            _ => ("no wall, beam or post has this name", &self.support_places, self.supports_hidden),
+        };
         let mut near = match found.may_look_for_near_names() {
             true => nearest(&typed.value, known.iter().map(|at| at.value.as_str())),
             false => Vec::new(),
         };
         let is_near = !near.is_empty();
+        if !is_near && hidden {
+            // It may be the name of one that has been told to lack it.
+            return;
+        }
         if near.is_empty() && known.len() <= 3 {
             near = known.iter().map(|at| at.value.as_str()).collect();
         }
@@ -109,7 +125,11 @@ impl Names {
             .filter_map(|name| Some(format!("{}, line {}", quoted(name), place(name)?)))
             .collect();
         let remedy = match listed.as_slice() {
-            [] => "give the name of one that is in this file".to_string(),
+            [] if known.len() <= 6 => {
+                let all: Vec<String> = known.iter().map(|at| quoted(&at.value)).collect();
+                format!("name one of {}", all.join(", "))
+            }
+            [] => "name one that is in this file".to_string(),
             several => format!("there is {}", either(several)),
         };
         let mut fault = Fault::new(name, Some(typed.span.clone()), fact, remedy);

@@ -36,6 +36,9 @@ pub(super) struct Typed {
     /// Names of posts and pads, which this version refuses: what stands on them is no further fault.
     pub later_supports: Vec<String>,
     pub beams: Vec<TypedBeam>,
+    /// A key of the file is misspelled or of the wrong type, so that walls and beams, or build-ups, are not known.
+    pub supports_hidden: bool,
+    pub build_ups_hidden: bool,
 }
 
 pub(super) struct TypedWall {
@@ -85,7 +88,10 @@ pub(super) fn read(parsed: &Parsed, found: &mut Findings) -> Typed {
         found.add(Fault::new(Name::BeamMissing, Some(0..0), "the job has no beam", remedy));
     }
     let later_supports = later_supports(parsed);
-    Typed { meta, logo, basis, limits, build_ups, walls, later_supports, beams }
+    let hidden = |key: &str| root.hides(key) || root.get(key).is_some_and(|item| item.value.as_array().is_none());
+    let supports_hidden = hidden("wall") || hidden("beam");
+    let build_ups_hidden = hidden("build-up");
+    Typed { supports_hidden, build_ups_hidden, meta, logo, basis, limits, build_ups, walls, later_supports, beams }
 }
 
 /// The tables of a list such as `[[beam]]`.
