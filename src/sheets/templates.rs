@@ -10,7 +10,7 @@ macro_rules! embedded {
     };
 }
 
-embedded!["data.typ", "look.typ", "sheet.typ", "cover.typ"];
+embedded!["data.typ", "look.typ", "sheet.typ", "cover.typ", "drawings/ink.typ", "drawings/drawings.typ"];
 
 /// Templates that stand in for embedded ones: name under `templates/` (such as `cover.typ`) to text. A name that is
 /// not embedded is a further file that an overriding template may import.

@@ -1,0 +1,5 @@
+//! What is drawn, tested as data and as set pages.
+
+mod diagrams;
+mod random;
+mod set;
