@@ -83,7 +83,8 @@ impl Layout {
 
     /// Whether a seat is joined to its carrier by a straight landing line on this page.
     pub fn joined(&self, page: &Page, members: &[Member], member: usize, seat: usize, clear: f64) -> bool {
-        let Some(Seat { at, on: Some((carrier, lands)) }) = members.get(member).and_then(|m| m.seats.get(seat)) else {
+        let Some(Seat { at, on: Some((carrier, lands)) }) = members.get(member).and_then(|m| m.seats.get(seat))
+        else {
             return false;
         };
         let (Some(upper), Some(lower)) = (page.find(member), page.find(*carrier)) else { return false };
@@ -99,6 +100,11 @@ impl Layout {
 
 /// Lays out these members (indices into `all`), in this order of preference from the top.
 pub fn lay_out(all: &[Member], chosen: &[usize], paper: &Paper) -> Layout {
+    lay_out_in(all, chosen, paper, paper.scales)
+}
+
+/// The same with scales of its own to choose from.
+pub fn lay_out_in(all: &[Member], chosen: &[usize], paper: &Paper, scales: &[f64]) -> Layout {
     let longest = chosen.iter().map(|m| all[*m].length).fold(0.0, f64::max);
     let width = |scale: f64| paper.width * scale / 1000.0;
     // The first scale at which every connected part fits whole; else the first that the longest member fits.
@@ -106,7 +112,6 @@ pub fn lay_out(all: &[Member], chosen: &[usize], paper: &Paper) -> Layout {
         let offsets = Offsets::of(all, chosen, f64::INFINITY);
         offsets.widths(all, chosen).into_iter().all(|w| w <= width(scale))
     };
-    let scales = paper.scales;
     let fitting = scales.iter().copied().find(|s| whole(*s));
     let least = scales.iter().copied().find(|s| longest <= width(*s));
     let scale = fitting.or(least).unwrap_or_else(|| longest * 1000.0 / paper.width);
@@ -203,7 +208,13 @@ impl Offsets {
 }
 
 /// A row for each member of a cluster, counted from the ground; the best of several orders of placing.
-fn rows(all: &[Member], cluster: &[usize], offsets: &Offsets, paper: &Paper, per_metre: f64) -> Vec<(usize, usize)> {
+fn rows(
+    all: &[Member],
+    cluster: &[usize],
+    offsets: &Offsets,
+    paper: &Paper,
+    per_metre: f64,
+) -> Vec<(usize, usize)> {
     let field = Field { all, cluster, offsets, paper, per_metre };
     let x = |m: &usize| offsets.x(*m);
     let end = |m: &usize| offsets.x(*m) + all[*m].length;

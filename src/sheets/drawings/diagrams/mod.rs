@@ -8,6 +8,8 @@ mod forces;
 mod loading;
 mod said;
 
+pub(super) use said::listed;
+
 use sagledger_calc::building::{Building, Carrier};
 use sagledger_calc::results::{Curve, ForceSource, Results};
 
