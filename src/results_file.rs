@@ -110,11 +110,7 @@ impl ResultsFile {
                 .assumptions
                 .iter()
                 .enumerate()
-                .map(|(n, a)| AssumptionEntry {
-                    number: n + 1,
-                    text: a.sentence.clone(),
-                    members: a.marks.clone(),
-                })
+                .map(|(n, a)| AssumptionEntry { number: n + 1, text: a.sentence.clone(), members: a.marks.clone() })
                 .collect(),
             beams: (0..results.beams.len()).map(|n| BeamEntry::new(building, results, n)).collect(),
             walls: building

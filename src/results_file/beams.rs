@@ -1,6 +1,6 @@
 //! A beam's entry in the results file.
 
-use sagledger_calc::actions::{Action, Actions};
+use sagledger_calc::actions::Actions;
 use sagledger_calc::building::{Building, Carrier, Stage};
 use sagledger_calc::limits::{Bound, LimitFrom, Movement};
 use sagledger_calc::quantity::{Force, Length};
@@ -85,7 +85,17 @@ struct BearingEntry {
     at_m: Figure,
     lands_m: Option<Figure>,
     #[serde(rename = "reaction_kN")]
-    reaction: Map<String, Value>,
+    reaction: Reaction,
+}
+
+#[derive(Serialize)]
+struct Reaction {
+    #[serde(flatten)]
+    per_action: PerAction,
+    design_max: Figure,
+    design_min: Figure,
+    uplift_max: Figure,
+    characteristic_max: Figure,
 }
 
 #[derive(Serialize)]
@@ -187,7 +197,7 @@ impl BeamEntry {
                 min: Figure(result.moment_min.value.to_knm()),
                 min_at_m: metres(result.moment_min.at),
             },
-            shear: Shear { max: Figure(result.shear.value.to_kn()), at_m: metres(result.shear.at) },
+            shear: Shear { max: Figure(result.shear.value.to_kn().abs()), at_m: metres(result.shear.at) },
             deflection_mm: Deflection {
                 own_total: movement(&m.own_total),
                 own_total_at_m: metres(m.own_total.at),
@@ -290,14 +300,14 @@ fn bearing_entry(building: &Building, actions: &Actions, bearing: &BearingResult
         Carrier::Wall(wall) => (building.walls[wall].name.clone(), None),
         Carrier::Beam { beam, lands } => (building.beams[beam].mark.clone(), Some(metres(lands))),
     };
-    let kn = |force: Force| json!(Figure(force.to_kn()));
-    let mut reaction: Map<String, Value> = Map::new();
-    let listed: &[(Action, Force)] = &bearing.reactions;
-    reaction.extend(listed.iter().map(|(action, force)| (actions.name(*action), kn(*force))));
-    reaction.insert("design_max".into(), kn(bearing.design_max.value));
-    reaction.insert("design_min".into(), kn(bearing.design_min.value));
-    reaction.insert("uplift_max".into(), kn(bearing.uplift_max()));
-    reaction.insert("characteristic_max".into(), kn(bearing.characteristic_max.value));
+    let kn = |force: Force| Figure(force.to_kn());
+    let reaction = Reaction {
+        per_action: per_action(actions, &bearing.reactions),
+        design_max: kn(bearing.design_max.value),
+        design_min: kn(bearing.design_min.value),
+        uplift_max: kn(bearing.uplift_max()),
+        characteristic_max: kn(bearing.characteristic_max.value),
+    };
     BearingEntry { on, at_m: metres(bearing.at), lands_m, reaction }
 }
 

@@ -4,6 +4,7 @@
 //! parts in their order, the templates under `templates/` place them on paper, and Typst sets them. The same package
 //! always gives the same bytes: fonts are embedded, the only date is the job's, no file, clock or network is read.
 
+pub mod drawings;
 pub mod fault;
 pub mod fonts;
 pub mod logo;

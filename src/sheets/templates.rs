@@ -26,6 +26,8 @@ embedded![
     "stacked.typ",
     "cautions.typ",
     "record.typ",
+    "drawings/ink.typ",
+    "drawings/drawings.typ",
 ];
 
 /// Templates that stand in for embedded ones: name under `templates/` (such as `cover.typ`) to text. A name that is

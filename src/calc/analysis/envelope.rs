@@ -9,7 +9,7 @@ use std::borrow::Cow;
 use crate::actions::Action;
 use crate::actions::combinations::{Combination, Purpose};
 use crate::analysis::contribution::Contribution;
-use crate::analysis::polynomial::{Poly, ZERO, accumulate, evaluate, greatest, sign_changes, upper_bound};
+use crate::analysis::polynomial::{Poly, ZERO, accumulate, evaluate, greatest, sign_changes, size, upper_bound};
 use crate::analysis::profile::piece_at;
 use crate::quantity::{Length, Q};
 use crate::results::{AbsentRow, Arrangement, CombinationId, Effect, Part};
@@ -41,6 +41,7 @@ impl Sense {
 pub struct Term<'a> {
     /// Index into the component's contributions.
     pub contribution: usize,
+    pub amount: f64,
     pub pieces: Cow<'a, [Poly]>,
 }
 
@@ -115,15 +116,18 @@ impl<'a> Field<'a> {
         Field {
             breaks: Cow::Owned(vec![0.0, 0.0]),
             contributions,
-            terms: terms.map(|(contribution, v)| Term { contribution, pieces: constant_piece(v) }).collect(),
+            terms: terms
+                .map(|(contribution, v)| Term { contribution, amount: 1.0, pieces: constant_piece(v) })
+                .collect(),
             constant: (constant != 0.0).then(|| constant_piece(constant)),
         }
     }
 
-    /// Value of a term on a piece at a distance from the piece's start.
+    /// Value of a term on a piece at a distance from the piece's start; what is only rounding is nothing.
     fn term(&self, term: &Term, piece: usize, t: f64) -> f64 {
-        let amount = self.contributions[term.contribution].amount;
-        term.pieces.get(piece).map_or(0.0, |p| amount * evaluate(p, t))
+        let Some(p) = term.pieces.get(piece) else { return 0.0 };
+        let value = evaluate(p, t);
+        if value.abs() <= 8.0 * f64::EPSILON * size(p, t) { 0.0 } else { term.amount * value }
     }
 
     fn constant_at(&self, piece: usize, t: f64) -> f64 {
@@ -409,15 +413,15 @@ fn cut(field: &Field, piece: usize, cells: &mut Vec<Cell>) {
         let Some(poly) = term.pieces.get(piece) else { continue };
         let c = &field.contributions[term.contribution];
         if c.action == Action::Permanent {
-            accumulate(&mut permanent, c.amount, poly);
+            accumulate(&mut permanent, term.amount, poly);
         } else if c.is_free() {
             sign_changes(poly, 0.0, length, &mut cuts);
         } else {
             match totals.iter_mut().find(|(a, _)| *a == c.action) {
-                Some((_, sum)) => accumulate(sum, c.amount, poly),
+                Some((_, sum)) => accumulate(sum, term.amount, poly),
                 None => {
                     let mut sum = ZERO;
-                    accumulate(&mut sum, c.amount, poly);
+                    accumulate(&mut sum, term.amount, poly);
                     totals.push((c.action, sum));
                 }
             }
@@ -442,15 +446,15 @@ fn cell(field: &Field, piece: usize, (from, to): (f64, f64), permanent: Poly, to
     for term in &field.terms {
         let Some(poly) = term.pieces.get(piece) else { continue };
         let c = &field.contributions[term.contribution];
-        let which = if c.amount * evaluate(poly, mid) > 0.0 { 0 } else { 1 };
+        let which = if term.amount * evaluate(poly, mid) > 0.0 { 0 } else { 1 };
         if c.action == Action::Permanent {
-            accumulate(&mut permanent_apart[which], c.amount, poly);
+            accumulate(&mut permanent_apart[which], term.amount, poly);
         } else if c.is_free() {
             match variable.iter_mut().find(|(a, _)| *a == c.action) {
-                Some((_, parts)) => accumulate(&mut parts[which], c.amount, poly),
+                Some((_, parts)) => accumulate(&mut parts[which], term.amount, poly),
                 None => {
                     let mut parts = [ZERO; 2];
-                    accumulate(&mut parts[which], c.amount, poly);
+                    accumulate(&mut parts[which], term.amount, poly);
                     variable.push((c.action, parts));
                 }
             }

@@ -9,7 +9,7 @@ use crate::analysis::loads::Resolved;
 use crate::analysis::polynomial::{Poly, derivative};
 use crate::analysis::profile::{accumulate, add_line, value_at};
 use crate::analysis::system::{Response, Responses, System, Variant};
-use crate::building::{Beam, Building};
+use crate::building::{Beam, Building, Carrier};
 use crate::fault::Fault;
 use crate::results::{Curve, Landing, Piece, Stretch, StretchKind};
 
@@ -95,7 +95,7 @@ impl<'a> Solved<'a> {
                 last = Some((c.unit, self.response(c.unit, local).and_then(&pieces)));
             }
             if let Some((_, Some(pieces))) = &last {
-                terms.push(Term { contribution, pieces: pieces.clone() });
+                terms.push(Term { contribution, amount: c.amount, pieces: pieces.clone() });
             }
         }
         Field {
@@ -183,6 +183,21 @@ impl<'a> Solved<'a> {
         (values, self.settled_at(local, x))
     }
 
+    /// Movement of a bearing by contribution, which is that of what carries it; `settles` left out.
+    pub fn bearing_values(&self, local: usize, bearing: usize) -> Vec<(usize, f64)> {
+        match self.beam(local).bearings[bearing].on {
+            Carrier::Wall(_) => Vec::new(),
+            Carrier::Beam { beam, lands } => {
+                self.local(beam).map_or_else(Vec::new, |carrier| self.movement_at(carrier, lands.si()).0)
+            }
+        }
+    }
+
+    /// Movement of a bearing under given factors, which is that of what carries it; `settles` left out.
+    pub fn bearing_movement(&self, local: usize, bearing: usize, factors: &[f64]) -> f64 {
+        self.bearing_values(local, bearing).iter().map(|(c, value)| factors[*c] * value).sum()
+    }
+
     /// Movement from `settles` anywhere in the building.
     pub fn settled_at(&self, local: usize, x: f64) -> f64 {
         let settled = self.settlement.as_ref().and_then(|s| s[local].as_ref());
@@ -199,7 +214,7 @@ impl<'a> Solved<'a> {
     pub fn factored(&self, field: &Field, factors: &[f64]) -> Curve {
         let mut sum: Vec<Poly> = Vec::new();
         for term in &field.terms {
-            let factor = factors[term.contribution] * self.contributions[term.contribution].amount;
+            let factor = factors[term.contribution] * term.amount;
             if factor != 0.0 {
                 accumulate(&mut sum, factor, &term.pieces);
             }

@@ -8,11 +8,14 @@
 //! Worked example (by hand): 457x191x67 UB in S275, V_Ed = 520 kN = 0.8 V_pl,Rd: ρ = 0.36, A_w = 428.0 × 8.5 =
 //! 3638 mm², A_w² / (4 t_w) = 389.3 cm³, M_V,Rd = (1470 − 0.36 × 389.3) × 0.275 = 366 kNm.
 
+use super::Inputs;
 use super::bending::MOMENT;
 use super::combined::size;
+use super::example::two;
 use super::section::{bent, sheared, with_shear};
 use super::shear::SHEAR;
 use super::{Combined, Outcome, Steel, judge, unverified};
+use crate::materials::Grade;
 use crate::quantity::{Force, Moment};
 use crate::results::{CheckUnit, Verdict};
 use crate::workings::{Number, Silent, Workings};
@@ -77,5 +80,29 @@ impl Reduced {
     /// M_V,Rd under a shear of this size (its sign does not matter).
     pub fn under(&self, shear: Force) -> Moment {
         with_shear(&mut Silent, &self.bent, &self.sheared, Force::from_si(shear.si().abs()))
+    }
+}
+
+/// The worked example above.
+pub fn example() -> Inputs {
+    Inputs::BendingWithShear(BendingWithShear {
+        steel: Steel::named("457x191x67 UB", Grade::S275),
+        moment: two(80e3, 80e3),
+        shear: two(200e3, 500e3 / 3.0),
+    })
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+    use crate::checks::example::near;
+    use crate::checks::run;
+
+    #[test]
+    fn worked_example() {
+        // By hand from (6.30): see the head of this file.
+        let outcome = run(&example());
+        near(outcome.demand, 228e3, 1e-12);
+        near(outcome.capacity, 366e3, 0.005);
     }
 }

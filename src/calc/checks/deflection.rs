@@ -8,10 +8,14 @@
 //! Worked example (by hand): w = 5 + 7 = 12 mm on a span of 4 m limited to span/250 = 16 mm: utilisation 0.75;
 //! with I_y = 4000 cm⁴ in hand, I_req = 4000 × 12 / 16 = 3000 cm⁴.
 
+use super::Inputs;
 use super::combined::{Writing, size};
+use super::example::characteristic;
 use super::{Combined, Outcome, Required, judge, limit};
+use crate::limits::{Bound, LimitFrom, LimitSet};
 use crate::limits::{Limit, Movement};
 use crate::quantity::{Length, SecondMoment};
+use crate::results::StretchKind;
 use crate::results::{CheckUnit, Stretch};
 use crate::workings::lines::step;
 use crate::workings::{Number, Workings, glossary};
@@ -81,4 +85,37 @@ pub(super) fn required<N: Number, W: Workings<N>>(
 /// The greater of two limits, for an overhang beside a span.
 pub(super) fn larger<N: Number>(one: Length<N>, other: Length<N>) -> Length<N> {
     crate::quantity::max(one, other)
+}
+
+/// The worked example above.
+pub fn example() -> Inputs {
+    Inputs::Deflection(Deflection {
+        limit: Limit {
+            movement: Movement::Total,
+            bounds: vec![Bound::SpanOver(250.0)],
+            from: LimitFrom::Set(LimitSet::BrittleFinish),
+        },
+        stretch: Stretch { kind: StretchKind::Span, from: Length::m(0.0), to: Length::m(4.0) },
+        movement: characteristic(5e-3, 7e-3),
+        second_moment: SecondMomentInHand::Scales { provided: SecondMoment::cm4(4000.0) },
+    })
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+    use crate::checks::example::near;
+    use crate::checks::run;
+
+    #[test]
+    fn worked_example() {
+        // By hand: see the head of this file.
+        let outcome = run(&example());
+        near(outcome.demand, 12e-3, 1e-12);
+        near(outcome.capacity, 16e-3, 1e-12);
+        near(outcome.utilisation, 0.75, 1e-12);
+        assert_eq!(outcome.clause, "span/250");
+        let Some(Required::Of(required)) = outcome.required else { panic!("{outcome:?}") };
+        near(Some(required.si()), 3000e-8, 1e-12);
+    }
 }

@@ -7,10 +7,13 @@
 //! Worked example: 152x152x23 UC in S275, held, M_Ed = 1.35 × 10 + 1.5 × 12 = 31.5 kNm: class 3,
 //! M_c,Rd = 45.1 kNm (EN 1993-1-1 Table 5.2 and section tables, from memory), utilisation 0.70.
 
+use super::Inputs;
 use super::bending::MOMENT;
 use super::combined::size;
+use super::example::two;
 use super::section::bent;
 use super::{Combined, Outcome, Steel, judge, unverified};
+use crate::materials::Grade;
 use crate::results::CheckUnit;
 use crate::workings::{Number, Workings};
 
@@ -51,4 +54,37 @@ pub(super) fn check<N: Number, W: Workings<N>>(w: &mut W, inputs: &LateralTorsio
         Err(refusal) => unverified(w, HELD_CLAUSE, M_Ed, CheckUnit::Moment, refusal.reason()),
     };
     Outcome { note: Some(HELD), ..outcome }
+}
+
+/// The worked example above.
+pub fn example() -> Inputs {
+    Inputs::LateralTorsionalBuckling(LateralTorsionalBuckling {
+        steel: Steel::named("152x152x23 UC", Grade::S275),
+        moment: two(10e3, 12e3),
+        held: true,
+    })
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+    use crate::checks::example::near;
+    use crate::checks::run;
+    use crate::results::Verdict;
+
+    #[test]
+    fn worked_example() {
+        // Class 3 by EN 1993-1-1 Table 5.2; W_el 164 cm3 from section tables, from memory.
+        let outcome = run(&example());
+        near(outcome.capacity, 45.1e3, 0.005);
+        near(outcome.demand, 31.5e3, 1e-12);
+        assert_eq!(outcome.note, Some("compression flange held"));
+        assert_eq!(outcome.verdict, Verdict::Met);
+
+        let Inputs::LateralTorsionalBuckling(inputs) = example() else { unreachable!() };
+        let free = run(&Inputs::LateralTorsionalBuckling(LateralTorsionalBuckling { held: false, ..inputs }));
+        assert_eq!(free.verdict, Verdict::NotVerified);
+        assert_eq!(free.reason.as_deref(), Some("lateral-torsional buckling"));
+        assert_eq!((free.capacity, free.utilisation), (None, None));
+    }
 }

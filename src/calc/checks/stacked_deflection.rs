@@ -12,11 +12,16 @@
 //! Worked example (by hand): w_own = 10.4 mm, left bearing 9.0 mm, right bearing 2.0 mm, at 2 m of 5 m:
 //! w_inh = 9.0 + (2.0 − 9.0) × 2 / 5 = 6.2 mm, w_st = 16.6 mm; limit 5200 / 250 = 20.8 mm: utilisation 0.80.
 
+use super::Inputs;
 use super::combined::{Writing, signed};
 use super::deflection::{SecondMomentInHand, larger, required};
+use super::example::characteristic;
 use super::{Combined, Outcome, Required, judge, limit};
 use crate::limits::Limit;
+use crate::limits::{Bound, LimitFrom, Movement};
 use crate::quantity::Length;
+use crate::quantity::SecondMoment;
+use crate::results::StretchKind;
 use crate::results::{CheckUnit, Stretch};
 use crate::workings::lines::step;
 use crate::workings::{Number, Workings, glossary};
@@ -191,5 +196,55 @@ fn hand_rule<N: Number, W: Workings<N>>(w: &mut W, rule: &HandRule) {
         w.say("it is unsafe by the difference");
         step!(w, "common practice; no check", dw_hand = w_exact - w_hand);
         let _ = dw_hand;
+    }
+}
+
+/// The worked example above.
+pub fn example() -> Inputs {
+    let on = |mark: &str, mm| BearingMovement { on: mark.into(), wall: false, movement: Length::mm(mm) };
+    Inputs::StackedDeflection(StackedDeflection {
+        limit: Limit {
+            movement: Movement::Stacked,
+            bounds: vec![Bound::SpanOver(250.0)],
+            from: LimitFrom::Given { reason: None },
+        },
+        stretch: Stretch { kind: StretchKind::Span, from: Length::m(0.0), to: Length::m(5.2) },
+        beside: None,
+        own: characteristic(4.4e-3, 6.0e-3),
+        inherited: Inherited {
+            left: on("B2", 9.0),
+            right: on("B3", 2.0),
+            span: Length::m(5.0),
+            to_place: Length::m(2.0),
+        },
+        settled: Length::m(0.0),
+        second_moment: SecondMomentInHand::Scales { provided: SecondMoment::cm4(2340.0) },
+        hand_rule: None,
+    })
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+    use crate::checks::example::near;
+    use crate::checks::run;
+    use crate::results::Verdict;
+
+    #[test]
+    fn worked_example() {
+        // By hand: see the head of this file. What is left of the limit: 20.8 - 6.2 = 14.6 mm.
+        let outcome = run(&example());
+        near(outcome.demand, 16.6e-3, 1e-12);
+        near(outcome.capacity, 20.8e-3, 1e-12);
+        let Some(Required::Of(required)) = outcome.required else { panic!("{outcome:?}") };
+        near(Some(required.si()), 2340e-8 * 10.4 / 14.6, 1e-12);
+
+        // Supports that use the whole limit leave no room for any beam.
+        let Inputs::StackedDeflection(mut inputs) = example() else { unreachable!() };
+        inputs.inherited.left.movement = Length::mm(30.0);
+        inputs.inherited.right.movement = Length::mm(30.0);
+        let used = run(&Inputs::StackedDeflection(inputs));
+        assert_eq!(used.required, Some(Required::BudgetUsed));
+        assert_eq!(used.verdict, Verdict::NotMet);
     }
 }

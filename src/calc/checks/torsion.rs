@@ -2,6 +2,7 @@
 //!
 //! Any distance e other than 0 makes the check "not verified: torsion"; e in mm.
 
+use super::Inputs;
 use super::{Outcome, unverified};
 use crate::quantity::Length;
 use crate::results::CheckUnit;
@@ -24,4 +25,24 @@ pub(super) fn check<N: Number, W: Workings<N>>(w: &mut W, inputs: &Torsion) -> O
     });
     let outcome = unverified(w, CLAUSE, e, CheckUnit::Length, "torsion");
     Outcome { demand: None, ..outcome }
+}
+
+/// A reaction 60 mm beside the web.
+pub fn example() -> Inputs {
+    Inputs::Torsion(Torsion { what: "reaction of B1".into(), offset: Length::mm(60.0) })
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+    use crate::checks::run;
+    use crate::results::Verdict;
+
+    #[test]
+    fn worked_example() {
+        // Nothing is verified: that it says so is the whole check.
+        let outcome = run(&example());
+        assert_eq!(outcome.verdict, Verdict::NotVerified);
+        assert_eq!(outcome.reason.as_deref(), Some("torsion"));
+    }
 }

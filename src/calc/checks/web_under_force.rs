@@ -15,10 +15,13 @@
 //!
 //! Worked example (by hand, test below): 254x146x37 UB in S275, seat of 150 mm at the beam's very end, length 4.80 m.
 
+use super::Inputs;
 use super::combined::{Writing, size};
+use super::example::two;
 use super::section::{Profile, Yielding, yielding};
 use super::{Combined, Outcome, Steel, judge, unverified};
 use crate::materials;
+use crate::materials::Grade;
 use crate::quantity::{Force, Length, Ratio, min, number};
 use crate::results::{CheckUnit, Verdict};
 use crate::workings::lines::step;
@@ -222,5 +225,35 @@ impl<N: Number> Web<N> {
         w.say("slenderness of the web");
         step!(w, "EN 1993-1-5 6.4(1), (6.4)", lambda_F = (l_y * t_w * f_y / F_cr).root());
         (l_y, lambda_F)
+    }
+}
+
+/// The worked example above.
+pub fn example() -> Inputs {
+    Inputs::WebUnderForce(WebUnderForce {
+        steel: Steel::named("254x146x37 UB", Grade::S275),
+        force: two(20e3, 10e3),
+        way: Way::AtEnd { c: Length::mm(0.0) },
+        stiff: StiffLength::Seat(Length::mm(150.0)),
+        a: Length::m(4.8),
+    })
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+    use crate::checks::example::near;
+    use crate::checks::run;
+
+    #[test]
+    fn worked_example() {
+        // By hand, in N and mm: h_w = 256.0 - 21.8 = 234.2; k_F = 2 + 6 * 150 / 234.2 = 5.843 (not above 6);
+        // l_e = 5.843 * 210000 * 6.3^2 / (2 * 275 * 234.2) = 378 > 150, so 150; m_1 = 146.4 / 6.3 = 23.24;
+        // m_2 = 0.02 * (234.2 / 10.9)^2 = 9.23; (6.12): l_y = 150 + 10.9 * sqrt(32.47) = 212.1, the least;
+        // F_cr = 0.9 * 5.843 * 210000 * 6.3^3 / 234.2 = 1 179 000; lambda_F = sqrt(212.1 * 6.3 * 275 / 1179000) = 0.558;
+        // chi_F = 0.5 / 0.558 = 0.896; F_Rd = 0.896 * 212.1 * 6.3 * 275 = 329 kN.
+        let outcome = run(&example());
+        near(outcome.capacity, 329e3, 0.002);
+        near(outcome.demand, 42e3, 1e-12);
     }
 }

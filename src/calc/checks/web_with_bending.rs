@@ -7,9 +7,11 @@
 
 use super::bending::MOMENT;
 use super::combined::size;
+use super::example::two;
 use super::section::bent;
 use super::web_under_force::{STIFFENER, WebUnderForce, force_and_resistance};
 use super::{Combined, Outcome, judge, unverified_without_demand};
+use super::{Inputs, web_under_force};
 use crate::quantity::number;
 use crate::results::{CheckUnit, Verdict};
 use crate::workings::lines::step;
@@ -42,4 +44,29 @@ pub(super) fn check<N: Number, W: Workings<N>>(w: &mut W, inputs: &WebWithBendin
         outcome.reason = Some(STIFFENER.into());
     }
     outcome
+}
+
+/// The worked example above, by the resistances of the section of the example of a web under force.
+pub fn example() -> Inputs {
+    let Inputs::WebUnderForce(web) = web_under_force::example() else { return web_under_force::example() };
+    // Half of 329 kN, and 0.60 of 432.6 cm3 x 275 N/mm2 = 119 kNm.
+    let web = WebUnderForce { force: two(60e3, 55.67e3), ..web };
+    let moment = two(30e3, 20.59e3);
+    Inputs::WebWithBending(WebWithBending { web, moment })
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+    use crate::checks::example::near;
+    use crate::checks::run;
+
+    #[test]
+    fn worked_example() {
+        // By hand: see the head of this file.
+        let outcome = run(&example());
+        near(outcome.demand, 0.98, 0.003);
+        near(outcome.capacity, 1.4, 1e-12);
+        near(outcome.utilisation, 0.70, 0.003);
+    }
 }

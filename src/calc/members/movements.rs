@@ -68,8 +68,8 @@ pub fn stretch_at(stretches: &[Stretch], x: f64) -> usize {
 
 /// Movements of the two bearings beside a stretch under given factors, `settles` left out.
 pub fn chord_movements(solved: &Solved, local: usize, stretch: usize, factors: &[f64]) -> (f64, f64) {
-    let (a, b) = solved.chord(local, stretch);
-    (solved.factored_movement(local, a, factors), solved.factored_movement(local, b, factors))
+    let (left, right) = solved.chord_bearings(local, stretch);
+    (solved.bearing_movement(local, left, factors), solved.bearing_movement(local, right, factors))
 }
 
 /// Adds what each beam's bending contributes to a movement: this beam's own part, then what its two bearings bring
@@ -145,20 +145,19 @@ pub fn parts_under<const FORCE: i8, const LENGTH: i8>(
 /// Tilt of one span, worst arrangement of the characteristic combinations; movement from `settles` is in it.
 pub fn tilt(solved: &Solved, local: usize, stretch: usize, sets: &Sets) -> Option<Tilt> {
     let (a, b) = solved.chord(local, stretch);
-    let (at_a, settled_a) = solved.movement_at(local, a);
-    let (at_b, settled_b) = solved.movement_at(local, b);
+    let (left_bearing, right_bearing) = solved.chord_bearings(local, stretch);
+    let (settled_a, settled_b) = (solved.settled_at(local, a), solved.settled_at(local, b));
     let mut values = vec![0.0; solved.contributions.len()];
-    for (c, value) in at_b {
-        values[c] += value;
-    }
-    for (c, value) in at_a {
-        values[c] -= value;
+    for (bearing, sign) in [(right_bearing, 1.0), (left_bearing, -1.0)] {
+        for (c, value) in solved.bearing_values(local, bearing) {
+            values[c] += sign * value;
+        }
     }
     let values: Vec<(usize, f64)> = values.into_iter().enumerate().collect();
     let field = Field::scalar(&solved.contributions, values, settled_b - settled_a);
     let found: Found<0, 1> = Envelope::new(field).greatest_size(&[sets.characteristic()], (0.0, 0.0))?;
-    let left = solved.factored_movement(local, a, &found.factors) + settled_a;
-    let right = solved.factored_movement(local, b, &found.factors) + settled_b;
+    let (left, right) = chord_movements(solved, local, stretch, &found.factors);
+    let (left, right) = (left + settled_a, right + settled_b);
     let mut difference = found.effect;
     difference.at = Length::from_si(b);
     Some(Tilt {

@@ -16,6 +16,10 @@ mod view;
 use serde::Serialize;
 use serde_json::Value;
 
+use crate::drawings::diagrams::Diagrams;
+use crate::drawings::scene::Drawing;
+use crate::drawings::stack::Stack;
+use crate::drawings;
 use crate::fonts;
 use crate::glue::PartName;
 use crate::package::{Package, Paper};
@@ -88,20 +92,39 @@ fn sieve(value: &mut Value) {
 }
 
 pub(crate) fn document(package: &Package) -> Document {
-    let view = View { building: package.building, results: package.results };
+    let (building, results) = (package.building, package.results);
+    let view = View { building, results };
     let paper = package.meta.drawing_sheets;
-    let mut parts = vec![Part::Cover(Box::new(cover::cover(package, view, None))), Part::Basis(basis::basis(package, view))];
+    let stacks: Vec<Stack> = results.chains.iter().map(|chain| Stack::of(building, results, chain)).collect();
+
+    let picture = stacks.first().and_then(Stack::cover).map(json);
+    let mut parts =
+        vec![Part::Cover(Box::new(cover::cover(package, view, picture))), Part::Basis(basis::basis(package, view))];
     parts.extend(loads::loads(view).map(Part::Loads));
-    parts.push(Part::LoadPath(takedown::load_path(view, paper, vec![])));
+    let path = drawings::load_path::load_path(building, results);
+    parts.push(Part::LoadPath(takedown::load_path(view, paper, path.into_iter().map(json).collect())));
     parts.push(Part::Governing(governing::governing(view)));
     for (index, beam, result) in view.beams() {
-        let drawings = Drawings::default();
+        let drawings = Drawings {
+            chain: drawings::small_chain::small_chain(building, index).map(json),
+            section: Some(json(drawings::section::section_drawing(&beam.section))),
+            diagrams: Diagrams::of(building, results, index).map(|d| json(d.drawing())),
+        };
         parts.push(Part::Member(Box::new(member::member(view, index, beam, result, drawings))));
     }
-    parts.push(Part::Stacked(stacked::stacked(view, paper, vec![], None)));
+    let chains = results.chains.iter().zip(&stacks).map(|(chain, stack)| stacked::Chain {
+        drawings: stack.drawings().into_iter().map(json).collect(),
+        budgets: drawings::budget::budget_bars(building, results, chain).into_iter().map(json).collect(),
+    });
+    parts.push(Part::Stacked(stacked::stacked(view, paper, chains.collect())));
     parts.push(Part::Cautions(cautions::cautions(package, view)));
     parts.push(Part::Record(record::record(package)));
     Document { meta: meta::meta(package), parts }
+}
+
+/// A drawing as it travels to its template.
+fn json(drawing: Drawing) -> Value {
+    serde_json::to_value(drawing).unwrap_or(Value::Null)
 }
 
 fn paper_name(paper: Paper) -> &'static str {

@@ -13,10 +13,16 @@ use crate::package::Paper;
 pub(super) struct StackedDeflections {
     paper: &'static str,
     intro: Runs,
-    drawings: Vec<Value>,
-    budget: Option<Value>,
+    chains: Vec<Chain>,
     rows: Vec<Row>,
     notes: Vec<Runs>,
+}
+
+/// Drawings of a chain, made elsewhere.
+#[derive(Debug, Serialize)]
+pub(super) struct Chain {
+    pub drawings: Vec<Value>,
+    pub budgets: Vec<Value>,
 }
 
 #[derive(Debug, Serialize)]
@@ -32,12 +38,7 @@ struct Row {
     hand: String,
 }
 
-pub(super) fn stacked(
-    view: View,
-    paper: Paper,
-    drawings: Vec<Value>,
-    budget: Option<Value>,
-) -> StackedDeflections {
+pub(super) fn stacked(view: View, paper: Paper, drawn: Vec<Chain>) -> StackedDeflections {
     let chains = &view.results.chains;
     let mut intro = vec![words("Each beam settles with whatever carries it. ")];
     if let [chain] = chains.as_slice() {
@@ -67,7 +68,7 @@ pub(super) fn stacked(
             hand: hand_rule(movements.hand_rule.si(), movements.stacked.total.value.si()),
         }
     });
-    StackedDeflections { paper: super::paper_name(paper), intro, drawings, budget, rows: rows.collect(), notes: notes(view) }
+    StackedDeflections { paper: super::paper_name(paper), intro, chains: drawn, rows: rows.collect(), notes: notes(view) }
 }
 
 /// "27.7, safe by 11.2 mm": the simple sum against the exact greatest movement.

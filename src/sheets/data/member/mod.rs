@@ -32,7 +32,7 @@ pub(super) struct Member {
     properties: properties::Properties,
     loads: Vec<loads::LoadTable>,
     reactions: Vec<reactions::ReactionTable>,
-    diagrams: Vec<Value>,
+    diagrams: Option<Value>,
     checks: Vec<checks::Row>,
     check_notes: Vec<Runs>,
     workings: Value,
@@ -69,7 +69,7 @@ struct Labelled {
 pub(super) struct Drawings {
     pub chain: Option<Value>,
     pub section: Option<Value>,
-    pub diagrams: Vec<Value>,
+    pub diagrams: Option<Value>,
 }
 
 pub(super) fn member(view: View, index: usize, beam: &Beam, result: &BeamResult, drawings: Drawings) -> Member {

@@ -1,0 +1,57 @@
+//! What the reader has found so far. Whatever reads a part of a job adds to it and goes on.
+
+use super::fault::{Fault, Kind, Span};
+use super::source::Source;
+
+/// Near names are looked for until there are this many findings: nobody reads on, and the search would cost too much.
+const NEAR_NAMES_UP_TO: usize = 200;
+
+pub(super) struct Findings<'s> {
+    pub source: &'s Source,
+    list: Vec<Fault>,
+}
+
+impl<'s> Findings<'s> {
+    pub fn new(source: &'s Source) -> Findings<'s> {
+        Findings { source, list: Vec::new() }
+    }
+
+    pub fn add(&mut self, fault: Fault) {
+        self.list.push(fault);
+    }
+
+    pub fn line(&self, span: &Span) -> usize {
+        self.source.line_of(span.start)
+    }
+
+    pub fn may_look_for_near_names(&self) -> bool {
+        self.list.len() < NEAR_NAMES_UP_TO
+    }
+
+    pub fn has_faults(&self) -> bool {
+        self.list.iter().any(|f| f.kind() == Kind::Fault)
+    }
+
+    /// Leaves out what touches one of these spans and follows from what is said about them already.
+    pub fn leave_out_within(&mut self, spans: &[Span], from: usize) {
+        let touches = |fault: &Fault| {
+            let Some(part) = &fault.span else { return false };
+            spans.iter().any(|s| part.start < s.end.max(s.start + 1) && s.start < part.end.max(part.start + 1))
+        };
+        let mut at = 0;
+        self.list.retain(|fault| {
+            at += 1;
+            at <= from || !touches(fault)
+        });
+    }
+
+    pub fn count(&self) -> usize {
+        self.list.len()
+    }
+
+    /// In order of places; what is about the whole file comes first.
+    pub fn in_order(mut self) -> Vec<Fault> {
+        self.list.sort_by_key(|f| f.span.as_ref().map(|s| (s.start, s.end)));
+        self.list
+    }
+}
