@@ -29,24 +29,42 @@ pub struct Typeset {
 /// # Errors
 /// A template that does not compile, or a document that cannot be an archive, with file and line where known.
 pub fn typeset(package: &Package) -> Result<Typeset, Fault> {
-    typeset_source(&source(package)?, &package.meta.number, &package.record.program_version)
+    let compiled = compile(&source(package)?)?;
+    Ok(Typeset {
+        pdf: compiled.pdf(&package.meta.number, &package.record.program_version)?,
+        sheets: compiled.document.pages().len(),
+        warnings: compiled.warnings,
+    })
 }
 
-/// Compiles and exports generated files: all that remains of [`typeset`] once they are made.
+/// Sheets as laid out, before they become a file.
+pub struct Compiled {
+    pub document: PagedDocument,
+    pub warnings: Vec<Problem>,
+    world: SheetWorld,
+}
+
+/// Compiles generated files with nothing else.
 ///
 /// # Errors
-/// As [`typeset`].
-pub fn typeset_source(files: &Files, number: &str, version: &str) -> Result<Typeset, Fault> {
+/// A template that does not compile.
+pub fn compile(files: &Files) -> Result<Compiled, Fault> {
     let world = SheetWorld::new(files).ok_or_else(|| Fault::of("the main file has no name"))?;
     let Warned { output, warnings } = typst::compile::<PagedDocument>(&world);
     let document = output.map_err(|errors| Fault::from_diagnostics(&world, &errors))?;
-    let options = options(&world, number, version)?;
-    let pdf = typst_pdf::pdf(&document, &options).map_err(|errors| Fault::from_diagnostics(&world, &errors))?;
-    Ok(Typeset {
-        pdf,
-        sheets: document.pages().len(),
-        warnings: warnings.iter().map(|w| Problem::from_diagnostic(&world, w)).collect(),
-    })
+    let warnings = warnings.iter().map(|w| Problem::from_diagnostic(&world, w)).collect();
+    Ok(Compiled { document, warnings, world })
+}
+
+impl Compiled {
+    /// The bytes of the PDF of a job.
+    ///
+    /// # Errors
+    /// A document that cannot be an archive.
+    pub fn pdf(&self, number: &str, program_version: &str) -> Result<Vec<u8>, Fault> {
+        let options = options(&self.world, number, program_version)?;
+        typst_pdf::pdf(&self.document, &options).map_err(|errors| Fault::from_diagnostics(&self.world, &errors))
+    }
 }
 
 fn options(world: &SheetWorld, number: &str, version: &str) -> Result<PdfOptions, Fault> {

@@ -17,7 +17,7 @@ mod data;
 mod export;
 mod glue;
 
-pub use export::{Typeset, source, typeset};
+pub use export::{Compiled, Typeset, compile, source, typeset};
 pub use fault::{Fault, Place, Problem};
 pub use logo::Logo;
 pub use package::{Draft, Meta, Package, Paper, Record};
