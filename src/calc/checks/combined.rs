@@ -88,8 +88,11 @@ impl<'a, const F: i8, const L: i8> Writing<'a, F, L> {
     }
 }
 
-/// Terms in one line of the sum: more would not fit its column.
-const TERMS_A_LINE: usize = 3;
+/// Room of one line of the sum, where a value takes 4 and a factor before it 2: more would not fit its column.
+const ROOM: usize = 20;
+const OF_VALUE: usize = 4;
+const OF_FACTOR: usize = 2;
+const OF_BRACKETS: usize = 2;
 
 /// The size of a combined effect, whichever way it acts.
 pub(super) fn size<N: Number, W: Workings<N>, const F: i8, const L: i8>(
@@ -115,21 +118,40 @@ pub(super) fn signed<N: Number, W: Workings<N>, const F: i8, const L: i8>(
     }
     w.say(|| sentence(combined, sign, writing.plural));
     let mut sum: Option<Q<N, F, L>> = None;
+    let (mut taken, mut lines) = (0, 0);
     for (place, part) in combined.parts.iter().enumerate() {
         let value = Q::from_si(sign * part.value.si());
         let value = w.given(writing.part.of(action_name(combined, place)), value);
         let term = factored(w, combined, part, value);
+        let own = room_of(combined, part) + if value.plain().si() < 0.0 { OF_BRACKETS } else { 0 };
         sum = Some(match sum {
             None => term,
-            Some(sum) if place % TERMS_A_LINE == 0 => {
-                w.line(clause, writing.so_far(place / TERMS_A_LINE), sum) + term
+            Some(sum) if taken + own > ROOM => {
+                lines += 1;
+                taken = OF_VALUE;
+                w.line(clause, writing.so_far(lines), sum) + term
             }
             Some(sum) => sum + term,
         });
+        taken += own;
     }
     match sum {
         Some(sum) => w.line(clause, writing.symbol(), sum),
         None => w.given(writing.symbol(), Q::from_si(0.0)),
+    }
+}
+
+/// The room that its term takes.
+fn room_of<const F: i8, const L: i8>(combined: &Combined<F, L>, part: &Part<F, L>) -> usize {
+    let factors = usize::from(has_partial(combined)) + usize::from(part.reduction != 1.0);
+    OF_VALUE + OF_FACTOR * factors
+}
+
+/// Factors of serviceability are all 1 and not written.
+fn has_partial<const F: i8, const L: i8>(combined: &Combined<F, L>) -> bool {
+    match combined.purpose {
+        Purpose::Strength | Purpose::Equilibrium => true,
+        Purpose::Characteristic | Purpose::Frequent | Purpose::QuasiPermanent => false,
     }
 }
 
@@ -150,18 +172,15 @@ fn factored<N: Number, W: Workings<N>, const F: i8, const L: i8>(
             false => w.given(&glossary::psi_0, reduction),
         }
     });
-    let partial: Option<Ratio<N>> = match combined.purpose {
-        Purpose::Strength | Purpose::Equilibrium => {
-            let partial = Q::from_si(part.partial);
-            Some(match (permanent, part.partial <= 1.0, several) {
-                (true, true, _) => w.given(&glossary::gamma_G_inf, partial),
-                (true, false, true) => w.given(&glossary::gamma_G_sup, partial),
-                (true, false, false) => w.given(&glossary::gamma_G, partial),
-                (false, ..) => w.given(&glossary::gamma_Q, partial),
-            })
+    let partial: Option<Ratio<N>> = has_partial(combined).then(|| {
+        let partial = Q::from_si(part.partial);
+        match (permanent, part.partial <= 1.0, several) {
+            (true, true, _) => w.given(&glossary::gamma_G_inf, partial),
+            (true, false, true) => w.given(&glossary::gamma_G_sup, partial),
+            (true, false, false) => w.given(&glossary::gamma_G, partial),
+            (false, ..) => w.given(&glossary::gamma_Q, partial),
         }
-        Purpose::Characteristic | Purpose::Frequent | Purpose::QuasiPermanent => None,
-    };
+    });
     // As f64 both ways of leaving a factor out are a multiplication by 1.
     match (partial, reduction) {
         (Some(partial), Some(reduction)) => value.scaled_by(partial * reduction),

@@ -82,11 +82,6 @@ pub(super) fn required<N: Number, W: Workings<N>>(
     }
 }
 
-/// The greater of two limits, for an overhang beside a span.
-pub(super) fn larger<N: Number>(one: Length<N>, other: Length<N>) -> Length<N> {
-    crate::quantity::max(one, other)
-}
-
 /// The worked example above.
 pub fn example() -> Inputs {
     Inputs::Deflection(Deflection {

@@ -187,7 +187,8 @@ pub(super) fn sheared<N: Number, W: Workings<N>>(w: &mut W, steel: &Steel) -> Re
     let A = w.given(&glossary::A, steel.section.area);
     let gamma_M0 = w.given(&glossary::gamma_M0, Ratio::from_si(steel.choices.gamma_m()));
     w.say("the shear area is the web with the roots of the flanges");
-    step!(w, "EN 1993-1-1 6.2.6(3)a", A_v = A - 2.0 * b * t_f + (t_w + 2.0 * r) * t_f);
+    step!(w, "EN 1993-1-1 6.2.6(3)a", A_r = (t_w + 2.0 * r) * t_f);
+    step!(w, "EN 1993-1-1 6.2.6(3)a", A_v = A - 2.0 * b * t_f + A_r);
     let whole = w.when(
         "EN 1993-1-1 6.2.6(3)a",
         (h_w * t_w).at_most(A_v),
@@ -229,10 +230,8 @@ pub(super) fn with_shear<N: Number, W: Workings<N>>(
         rho = min((2.0 * V_Ed / V_pl_Rd - 1.0).squared(), crate::quantity::number(1.0))
     );
     step!(w, "EN 1993-1-1 6.2.8(5)", A_w = h_w * t_w);
-    step!(
-        w,
-        "EN 1993-1-1 6.2.8(5), (6.30)",
-        M_V_Rd = min((modulus - rho * A_w.squared() / (4.0 * t_w)) * f_y / gamma_M0, M_c_Rd)
-    );
+    w.say("what the shear leaves of the modulus resists the moment");
+    step!(w, "EN 1993-1-1 6.2.8(5)", W_V = modulus - rho * A_w.squared() / (4.0 * t_w));
+    step!(w, "EN 1993-1-1 6.2.8(5), (6.30)", M_V_Rd = min(W_V * f_y / gamma_M0, M_c_Rd));
     M_V_Rd
 }

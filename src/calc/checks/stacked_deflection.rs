@@ -14,13 +14,14 @@
 
 use super::Inputs;
 use super::combined::{Writing, signed};
-use super::deflection::{SecondMomentInHand, larger, required};
+use super::deflection::{SecondMomentInHand, required};
 use super::example::characteristic;
+use super::places::the_wall;
 use super::{Combined, Outcome, Required, judge, limit};
 use crate::limits::Limit;
 use crate::limits::{Bound, LimitFrom, Movement};
-use crate::quantity::Length;
 use crate::quantity::SecondMoment;
+use crate::quantity::{Length, max};
 use crate::results::StretchKind;
 use crate::results::{CheckUnit, Stretch};
 use crate::workings::lines::step;
@@ -92,12 +93,16 @@ pub(super) fn check<N: Number, W: Workings<N>>(w: &mut W, inputs: &StackedDeflec
         w_st
     };
 
-    let mut w_lim = limit::length(w, &inputs.limit, &inputs.stretch);
-    if let Some(beside) = &inputs.beside {
-        let of_span = limit::length(w, &inputs.limit, beside);
-        w.say("the larger of the overhang\u{2019}s limit and that of the span beside it counts");
-        w_lim = w.line("common practice", glossary::w_lim.of("max"), larger(w_lim, of_span));
-    }
+    let w_lim = match &inputs.beside {
+        None => limit::length(w, &inputs.limit, &inputs.stretch),
+        Some(beside) => {
+            let of_overhang = limit::named(w, &inputs.limit, &inputs.stretch, glossary::w_lim.of("overhang"));
+            let of_span = limit::named(w, &inputs.limit, beside, glossary::w_lim.of("span"));
+            w.say("the larger of the overhang\u{2019}s limit and that of the span beside it counts");
+            step!(w, "common practice", w_lim = max(of_overhang, of_span));
+            w_lim
+        }
+    };
     let outcome = judge(w, "", size, w_lim, CheckUnit::Length);
 
     let required = required(w, &inputs.second_moment, |w, I_y| {
@@ -153,12 +158,11 @@ pub(super) fn bearings<N: Number, W: Workings<N>>(
             (false, true) => "wall".to_string(),
             (false, false) => bearing.on.clone(),
         };
-        if bearing.movement.si() == 0.0 {
-            return w.given(glossary::w.of(sub), bearing.movement);
-        }
-        let on = bearing.on.clone();
-        w.looked_up("solution of the whole building", glossary::w.of(sub), bearing.movement, move || {
-            format!("{on} goes down by this much under the bearing.")
+        let on = if bearing.wall { the_wall(&bearing.on) } else { bearing.on.clone() };
+        let still = bearing.movement.si() == 0.0;
+        w.looked_up("solution of the whole building", glossary::w.of(sub), bearing.movement, move || match still {
+            true => format!("{on} stays where it is"),
+            false => format!("{on} goes down by this much under the bearing"),
         })
     };
     (one(left, "left"), one(right, "right"))

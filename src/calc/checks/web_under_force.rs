@@ -109,7 +109,12 @@ fn resistance<N: Number, W: Workings<N>>(w: &mut W, inputs: &WebUnderForce, s: &
             let c = w.given(&glossary::c, c);
             w.say("the force stands near the beam\u{2019}s end, type (c)");
             step!(w, "EN 1993-1-5 6.4(1), Figure 6.1", k_F = min(2.0 + 6.0 * (s_s + c) / h_w, number(6.0)));
-            step!(w, "EN 1993-1-5 6.5(3), (6.13)", l_e = min(k_F * E * t_w.squared() / (2.0 * f_y * h_w), s_s + c));
+            let l_e_13 = w.line(
+                "EN 1993-1-5 6.5(3), (6.13)",
+                glossary::l_e.of("13"),
+                k_F * E * t_w.squared() / (2.0 * f_y * h_w),
+            );
+            step!(w, "EN 1993-1-5 6.5(3), (6.13)", l_e = min(l_e_13, s_s + c));
             (k_F, Some(l_e))
         }
     };
@@ -193,35 +198,25 @@ struct Web<N> {
 impl<N: Number> Web<N> {
     fn slenderness<W: Workings<N>>(&self, w: &mut W, m_2: Ratio<N>) -> (Length<N>, Ratio<N>) {
         let Web { s_s, t_f, t_w, a, m_1, f_y, F_cr, .. } = *self;
-        let within = |w: &mut W| {
-            w.line(
-                "EN 1993-1-5 6.5(2), (6.10)",
-                glossary::l_y.of("10"),
-                s_s + 2.0 * t_f * (1.0 + (m_1 + m_2).root()),
-            )
-        };
-        let l_y = match self.l_e {
-            None => {
-                w.say("the force spreads through the flange, at most up to the stiffeners");
-                step!(w, "EN 1993-1-5 6.5(2), (6.10)", l_y = min(s_s + 2.0 * t_f * (1.0 + (m_1 + m_2).root()), a));
-                l_y
+        w.say(match self.l_e {
+            None => "the force spreads through the flange, at most up to the stiffeners",
+            Some(_) => {
+                "the force spreads through the flange; the least length counts, at most up to the stiffeners"
             }
+        });
+        step!(w, "EN 1993-1-5 6.5(2), (6.10)", m = m_1 + m_2);
+        let l_y_10 =
+            w.line("EN 1993-1-5 6.5(2), (6.10)", glossary::l_y.of("10"), s_s + 2.0 * t_f * (1.0 + m.root()));
+        let least = match self.l_e {
+            None => min(l_y_10, a),
             Some(l_e) => {
-                w.say(
-                    "the force spreads through the flange; the least length counts, at most up to the stiffeners",
-                );
-                let l_y_10 = within(w);
-                let l_y_11 = w.line(
-                    "EN 1993-1-5 6.5(3), (6.11)",
-                    glossary::l_y.of("11"),
-                    l_e + t_f * (m_1 / 2.0 + (l_e / t_f).squared() + m_2).root(),
-                );
-                let l_y_12 =
-                    w.line("EN 1993-1-5 6.5(3), (6.12)", glossary::l_y.of("12"), l_e + t_f * (m_1 + m_2).root());
-                step!(w, "EN 1993-1-5 6.5(3)", l_y = min(min(min(l_y_10, l_y_11), l_y_12), a));
-                l_y
+                step!(w, "EN 1993-1-5 6.5(3), (6.11)", m_e = m_1 / 2.0 + (l_e / t_f).squared() + m_2);
+                let l_y_11 = w.line("EN 1993-1-5 6.5(3), (6.11)", glossary::l_y.of("11"), l_e + t_f * m_e.root());
+                let l_y_12 = w.line("EN 1993-1-5 6.5(3), (6.12)", glossary::l_y.of("12"), l_e + t_f * m.root());
+                min(min(min(l_y_10, l_y_11), l_y_12), a)
             }
         };
+        step!(w, "EN 1993-1-5 6.5", l_y = least);
         w.say("slenderness of the web");
         step!(w, "EN 1993-1-5 6.4(1), (6.4)", lambda_F = (l_y * t_w * f_y / F_cr).root());
         (l_y, lambda_F)

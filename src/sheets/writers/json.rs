@@ -136,4 +136,3 @@ fn at_least(inner: &Formula, least: Tightness, form: Form) -> Value {
     let node = node(inner, form);
     if tightness(inner) < least { json!({"paren": node}) } else { node }
 }
-
