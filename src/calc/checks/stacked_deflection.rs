@@ -14,7 +14,7 @@
 
 use super::Inputs;
 use super::combined::{Writing, signed};
-use super::deflection::{SecondMomentInHand, required};
+use super::deflection::{SecondMomentInHand, required, upward};
 use super::example::characteristic;
 use super::places::the_wall;
 use super::{Combined, Outcome, Required, judge, limit};
@@ -22,8 +22,7 @@ use crate::limits::Limit;
 use crate::limits::{Bound, LimitFrom, Movement};
 use crate::quantity::SecondMoment;
 use crate::quantity::{Length, max};
-use crate::results::StretchKind;
-use crate::results::{CheckUnit, Stretch};
+use crate::results::{CheckUnit, Stretch, StretchKind};
 use crate::workings::lines::step;
 use crate::workings::{Number, Workings, glossary};
 
@@ -85,14 +84,6 @@ pub(super) fn check<N: Number, W: Workings<N>>(w: &mut W, inputs: &StackedDeflec
         None => w_own + w_inh,
     };
     step!(w, "common practice", w_st = sum);
-    let up = w_st.plain().si() < 0.0;
-    let size = if up {
-        step!(w, "common practice", w_up = -w_st);
-        w_up
-    } else {
-        w_st
-    };
-
     let w_lim = match &inputs.beside {
         None => limit::length(w, &inputs.limit, &inputs.stretch),
         Some(beside) => {
@@ -102,6 +93,20 @@ pub(super) fn check<N: Number, W: Workings<N>>(w: &mut W, inputs: &StackedDeflec
             step!(w, "common practice", w_lim = max(of_overhang, of_span));
             w_lim
         }
+    };
+    let up = w_st.plain().si() < 0.0;
+    if up && inputs.stretch.kind != StretchKind::Span {
+        let outcome = upward(w, limit::bounds(&inputs.limit), w_lim);
+        if let Some(rule) = &inputs.hand_rule {
+            hand_rule(w, rule);
+        }
+        return outcome;
+    }
+    let size = if up {
+        step!(w, "common practice", w_up = -w_st);
+        w_up
+    } else {
+        w_st
     };
     let outcome = judge(w, "", size, w_lim, CheckUnit::Length);
 

@@ -145,6 +145,7 @@ fn generated_inputs_take_every_branch() {
         "No second moment of area of this beam keeps the limit.",
         "Something of the limit is left for the beam itself.",
         "The supports have used the whole limit: no second moment of area of this beam keeps it.",
+        "The overhang goes up, and limits look at its downward movement: nothing of it is used.",
         "Both bearings stay where they are.",
         "The hand rule is on the safe side.",
         "The hand rule is on the unsafe side.",
