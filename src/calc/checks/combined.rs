@@ -63,13 +63,19 @@ pub(super) struct Writing<'a, const FORCE: i8, const LENGTH: i8> {
     pub part: &'static Entry<FORCE, LENGTH>,
     /// "moments": what is combined.
     pub plural: &'a str,
+    /// What it means that the signs are turned; empty where a size says it all.
+    pub turned: &'static str,
     /// A subscript of its own for the whole.
     pub sub: Option<&'a str>,
 }
 
 impl<'a, const F: i8, const L: i8> Writing<'a, F, L> {
     pub const fn new(whole: &'static Entry<F, L>, part: &'static Entry<F, L>, plural: &'a str) -> Self {
-        Writing { whole, part, plural, sub: None }
+        Writing { whole, part, plural, turned: "", sub: None }
+    }
+
+    pub const fn turned(self, turned: &'static str) -> Self {
+        Writing { turned, ..self }
     }
 
     fn symbol(&self) -> Symbol<'a, F, L> {
@@ -114,9 +120,9 @@ pub(super) fn signed<N: Number, W: Workings<N>, const F: i8, const L: i8>(
     let clause = combined.clause();
     if combined.parts.is_empty() {
         let nought = Q::from_si(0.0);
-        return w.looked_up(clause, writing.symbol(), nought, "no action contributes");
+        return w.looked_up(clause, writing.symbol(), nought, "no action contributes at this place");
     }
-    w.say(|| sentence(combined, sign, writing.plural));
+    w.say(|| sentence(combined, sign, writing));
     let mut sum: Option<Q<N, F, L>> = None;
     let (mut taken, mut lines) = (0, 0);
     for (place, part) in combined.parts.iter().enumerate() {
@@ -238,7 +244,8 @@ fn spoken(action: Action) -> String {
     }
 }
 
-fn sentence<const F: i8, const L: i8>(combined: &Combined<F, L>, sign: f64, plural: &str) -> String {
+fn sentence<const F: i8, const L: i8>(combined: &Combined<F, L>, sign: f64, writing: &Writing<'_, F, L>) -> String {
+    let Writing { plural, turned, .. } = writing;
     let names = |leads: bool| {
         let chosen = combined.parts.iter().filter(|p| p.action != Action::Permanent && p.leads == leads);
         let mut names: Vec<String> = chosen.map(|p| spoken(p.action)).collect();
@@ -246,10 +253,10 @@ fn sentence<const F: i8, const L: i8>(combined: &Combined<F, L>, sign: f64, plur
         names
     };
     let (led, with) = (names(true), names(false));
-    let mut words = match sign < 0.0 {
-        true => format!("The {plural} of each action are combined, their signs turned."),
-        false => format!("The {plural} of each action are combined."),
-    };
+    let mut words = format!("The {plural} of each action are combined.");
+    if sign < 0.0 && !turned.is_empty() {
+        words.push_str(&format!(" {turned}."));
+    }
     let verb =
         |names: &[String], one: &str, more: &str| if names.len() == 1 { one.to_string() } else { more.to_string() };
     let capital = |text: String| {
@@ -257,7 +264,7 @@ fn sentence<const F: i8, const L: i8>(combined: &Combined<F, L>, sign: f64, plur
         letters.next().map(|c| c.to_uppercase().collect::<String>() + letters.as_str()).unwrap_or_default()
     };
     match (led.is_empty(), with.is_empty()) {
-        (true, true) => words.push_str(" Permanent actions alone make it greatest."),
+        (true, true) => words.push_str(" Permanent actions alone count."),
         (false, true) => {
             words.push_str(&format!(" {} {}.", capital(listed(&led)), verb(&led, "leads", "lead together")));
         }

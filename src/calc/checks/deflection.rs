@@ -47,7 +47,8 @@ pub(super) fn check<N: Number, W: Workings<N>>(w: &mut W, inputs: &Deflection) -
         Movement::Stacked => &glossary::w_st,
         Movement::Tilt => &glossary::dw,
     };
-    let writing = Writing::new(whole, &glossary::w, "own movements");
+    let writing = Writing::new(whole, &glossary::w, "own movements")
+        .turned("The beam goes up here; its movement is given as a size");
     if inputs.stretch.kind != StretchKind::Span && inputs.movement.value() < 0.0 {
         signed(w, &inputs.movement, 1.0, &writing);
         let w_lim = limit::length(w, &inputs.limit, &inputs.stretch);

@@ -94,7 +94,9 @@ pub(super) fn class<N: Number, W: Workings<N>>(w: &mut W, s: &Yielding<N>) -> Cl
     let Profile { h, b, t_w, t_f, r, .. } = s.profile;
     let eps = s.epsilon;
 
+    w.say("what stands out of the flange and what is flat of the web decide the class");
     step!(w, CLAUSE, c_f = (b - t_w - 2.0 * r) / 2.0);
+    step!(w, CLAUSE, d = h - 2.0 * t_f - 2.0 * r);
     let flange =
         if w.when(CLAUSE, (c_f / t_f).at_most(9.0 * eps), "the flange is class 1", "the flange is not class 1") {
             Class::One
@@ -112,7 +114,6 @@ pub(super) fn class<N: Number, W: Workings<N>>(w: &mut W, s: &Yielding<N>) -> Cl
             Class::Four
         };
 
-    step!(w, CLAUSE, d = h - 2.0 * t_f - 2.0 * r);
     let web = if w.when(CLAUSE, (d / t_w).at_most(72.0 * eps), "the web is class 1", "the web is not class 1") {
         Class::One
     } else if w.when(CLAUSE, (d / t_w).at_most(83.0 * eps), "the web is class 2", "the web is not class 2") {

@@ -78,11 +78,17 @@ pub(super) fn check<N: Number, W: Workings<N>>(w: &mut W, inputs: &StackedDeflec
     let w_own = signed(w, &inputs.own, 1.0, &own);
     let w_inh = inherited(w, &inputs.inherited);
     let w_set = settled(w, inputs.settled);
-    w.say("own, inherited and settled movement add up");
-    let sum = match w_set {
-        Some(w_set) => w_own + w_inh + w_set,
-        None => w_own + w_inh,
+    let sum = match (w_inh, w_set) {
+        (Some(w_inh), Some(w_set)) => w_own + w_inh + w_set,
+        (Some(from_below), None) | (None, Some(from_below)) => w_own + from_below,
+        (None, None) => w_own,
     };
+    w.say(match (w_inh, w_set) {
+        (None, None) => "both bearings stay where they are: the stacked movement is the beam\u{2019}s own",
+        (None, Some(_)) => "own and settled movement add up",
+        (Some(_), None) => "own and inherited movement add up",
+        (Some(_), Some(_)) => "own, inherited and settled movement add up",
+    });
     step!(w, "common practice", w_st = sum);
     let w_lim = match &inputs.beside {
         None => limit::length(w, &inputs.limit, &inputs.stretch),
@@ -112,18 +118,26 @@ pub(super) fn check<N: Number, W: Workings<N>>(w: &mut W, inputs: &StackedDeflec
 
     let required = required(w, &inputs.second_moment, |w, I_y| {
         let down = |movement: Length<N>| if up { -movement } else { movement };
-        let used = match w_set {
-            Some(w_set) => w_lim - down(w_inh) - down(w_set),
-            None => w_lim - down(w_inh),
+        let used = match (w_inh, w_set) {
+            (Some(w_inh), Some(w_set)) => Some(w_lim - down(w_inh) - down(w_set)),
+            (Some(from_below), None) | (None, Some(from_below)) => Some(w_lim - down(from_below)),
+            (None, None) => None,
         };
-        w.say("what the supports have used of the limit is no longer the beam\u{2019}s own");
-        step!(w, "common practice", w_left = used);
-        let some_left = w.when(
-            "common practice",
-            w_left.is_positive(),
-            "something of the limit is left for the beam itself",
-            "the supports have used the whole limit: no second moment of area of this beam keeps it",
-        );
+        let w_left = match used {
+            None => w_lim,
+            Some(left) => {
+                w.say("what the supports have used of the limit is no longer the beam\u{2019}s own");
+                step!(w, "common practice", w_left = left);
+                w_left
+            }
+        };
+        let some_left = used.is_none()
+            || w.when(
+                "common practice",
+                w_left.is_positive(),
+                "something of the limit is left for the beam itself",
+                "the supports have used the whole limit: no second moment of area of this beam keeps it",
+            );
         if !some_left {
             return Required::BudgetUsed;
         }
@@ -137,17 +151,16 @@ pub(super) fn check<N: Number, W: Workings<N>>(w: &mut W, inputs: &StackedDeflec
     Outcome { required, clause: limit::bounds(&inputs.limit), ..outcome }
 }
 
-/// w_inh = w_1 + (w_2 − w_1) x / L.
-fn inherited<N: Number, W: Workings<N>>(w: &mut W, line: &Inherited) -> Length<N> {
+/// w_inh = w_1 + (w_2 − w_1) x / L; none where both bearings stay where they are.
+fn inherited<N: Number, W: Workings<N>>(w: &mut W, line: &Inherited) -> Option<Length<N>> {
     if line.left.movement.si() == 0.0 && line.right.movement.si() == 0.0 {
-        let nought = Length::from_si(0.0);
-        return w.looked_up("common practice", &glossary::w_inh, nought, "both bearings stay where they are");
+        return None;
     }
     let (w_1, w_2) = bearings(w, &line.left, &line.right);
     let (x, L) = (w.given(&glossary::x, line.to_place), w.given(&glossary::L, line.span));
     w.say("what the place inherits is the straight line between the two bearings");
     step!(w, "common practice", w_inh = w_1 + (w_2 - w_1) * x / L);
-    w_inh
+    Some(w_inh)
 }
 
 /// The movements of two bearings, under the names of what they stand on.
@@ -183,7 +196,11 @@ fn settled<N: Number, W: Workings<N>>(w: &mut W, settled: Length) -> Option<Leng
 /// Never a check: the sum of the largest own movements down the route, and how far it is off.
 fn hand_rule<N: Number, W: Workings<N>>(w: &mut W, rule: &HandRule) {
     let own = |w: &mut W, (mark, movement): &(String, Length)| w.given(glossary::w_own.of(mark.clone()), *movement);
+    // A beam on walls alone has nothing to add.
     let [first, rest @ ..] = rule.route.as_slice() else { return };
+    if rest.is_empty() {
+        return;
+    }
     let mut sum = own(w, first);
     for next in rest {
         sum = sum + own(w, next);

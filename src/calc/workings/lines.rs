@@ -295,22 +295,19 @@ impl<'t> Workings<Traced<'t>> for &'t Tape {
 impl State {
     /// Puts a record where it belongs; one that stands already, unchanged, is not written twice.
     fn record(&mut self, clause: String, words: String, what: What) {
-        let opened = |open: &Option<(u32, String)>, records: &[Record]| {
-            open.as_ref().is_some_and(|(group, _)| records.last().is_some_and(|last| last.group == *group))
-        };
-        if self.stands(&what, &clause) {
-            // What was said of it stands there too.
-            if !opened(&self.open, &self.records) {
-                self.open = None;
-            }
-            return;
-        }
         let joins = match what {
             What::Equation { .. } | What::Requirement { .. } => true,
             // A table's row has its own sentence, if any.
             What::Value { .. } => words.is_empty(),
             What::Chapter | What::Note | What::Comparison { .. } => false,
         };
+        if self.stands(&what, &clause) {
+            // What was said of several results still holds for those of them that are new.
+            if !joins {
+                self.open = None;
+            }
+            return;
+        }
         let (group, sentence) = match (&what, self.open.take(), self.records.last()) {
             (_, Some((group, said)), _) if joins => {
                 self.open = Some((group, said.clone()));
