@@ -313,4 +313,46 @@ mod tests {
         assert_eq!(one_in(-0.002), "1/500");
         assert_eq!(one_in(0.0), "0");
     }
+
+    #[test]
+    fn every_rounding_lies_within_half_a_unit_and_reads_back_as_printed() {
+        let mut state = 1u64;
+        let mut unit = || {
+            state = state.wrapping_mul(6_364_136_223_846_793_005).wrapping_add(1_442_695_040_888_963_407);
+            (state >> 11) as f64 / (1u64 << 53) as f64
+        };
+        for _ in 0..20_000 {
+            let x = (unit() - 0.5) * 10f64.powi((unit() * 18.0) as i32 - 9);
+            for (rounding, kept) in [
+                (Rounding::Significant(3), 3),
+                (Rounding::Significant(7), 7),
+                (Rounding::Places(1), 17),
+                (Rounding::Places(3), 17),
+            ] {
+                let d = Decimal::rounded(x, rounding, Unit::Kn).unwrap();
+                let half = 0.5 * d.moved(3).unit_of_last_figure();
+                assert!((d.moved(3).value() - x).abs() <= half * (1.0 + 1e-9), "{x} {rounding:?} {d}");
+                assert!(d.figures() <= kept, "{x} {rounding:?} {d}");
+                let text = d.to_string();
+                assert!(!text.contains('-'), "{text}");
+                let read: f64 = text.replace(MINUS, "-").parse().unwrap();
+                assert_eq!(read, d.value(), "{text}");
+                assert!(!(read == 0.0 && text.contains(MINUS)), "{text}");
+            }
+        }
+    }
+
+    #[test]
+    fn one_value_rounded_coarser_is_the_finer_figure_rounded_again() {
+        // Except where the finer one ends in 5, its rounding to fewer figures is the rounding of the value itself.
+        for n in 1..20_000u32 {
+            let x = f64::from(n).sqrt() * 7.3;
+            let (fine, coarse) = (Decimal::significant(x, 5).unwrap(), Decimal::significant(x, 3).unwrap());
+            let ends = fine.to_string().replace('.', "");
+            if ends.ends_with("50") {
+                continue;
+            }
+            assert_eq!(Decimal::significant(fine.value(), 3).unwrap(), coarse, "{x}");
+        }
+    }
 }
