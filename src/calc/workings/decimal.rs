@@ -8,6 +8,12 @@ use super::unit::Unit;
 /// U+2212, the minus sign.
 pub const MINUS: char = '\u{2212}';
 
+/// Powers of ten that a double holds exactly.
+const TENS: [f64; 23] = [
+    1e0, 1e1, 1e2, 1e3, 1e4, 1e5, 1e6, 1e7, 1e8, 1e9, 1e10, 1e11, 1e12, 1e13, 1e14, 1e15, 1e16, 1e17, 1e18, 1e19,
+    1e20, 1e21, 1e22,
+];
+
 /// A decimal number `digits × 10^exponent` with a sign; zero has none.
 #[derive(Clone, Copy, Debug, PartialEq, Eq)]
 pub struct Decimal {
@@ -100,9 +106,15 @@ impl Decimal {
 
     /// The decimal read back as a double.
     pub fn value(self) -> f64 {
-        let sign = if self.negative { "-" } else { "" };
-        // A decimal of at most 17 digits always reads.
-        format!("{sign}{}e{}", self.digits, self.exponent).parse().unwrap_or(f64::NAN)
+        let sign = if self.negative { -1.0 } else { 1.0 };
+        // Up to these sizes digits and power of ten are exact doubles, so that one operation rounds correctly.
+        let exact = self.digits < 1 << 53;
+        match usize::try_from(self.exponent.unsigned_abs()).ok().and_then(|n| TENS.get(n)) {
+            Some(ten) if exact && self.exponent >= 0 => sign * (self.digits as f64 * ten),
+            Some(ten) if exact => sign * (self.digits as f64 / ten),
+            // A decimal of at most 17 digits always reads.
+            _ => sign * format!("{}e{}", self.digits, self.exponent).parse().unwrap_or(f64::NAN),
+        }
     }
 
     /// Times ten to a power: only the point moves.
@@ -117,7 +129,7 @@ impl Decimal {
 
     /// One unit of the last figure.
     pub fn unit_of_last_figure(self) -> f64 {
-        format!("1e{}", self.exponent).parse().unwrap_or(f64::NAN)
+        Decimal { negative: false, digits: 1, exponent: self.exponent }.value()
     }
 
     /// Number of figures, leading zeros not counted.
@@ -335,6 +347,8 @@ mod tests {
                 assert!(d.figures() <= kept, "{x} {rounding:?} {d}");
                 let text = d.to_string();
                 assert!(!text.contains('-'), "{text}");
+                let long: f64 = format!("{}e{}", d.digits, d.exponent).parse().unwrap();
+                assert_eq!(long, d.value().abs(), "{text}");
                 let read: f64 = text.replace(MINUS, "-").parse().unwrap();
                 assert_eq!(read, d.value(), "{text}");
                 assert!(!(read == 0.0 && text.contains(MINUS)), "{text}");

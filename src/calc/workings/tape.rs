@@ -217,10 +217,8 @@ impl State {
             (Node::Variable(a), Node::Variable(b)) => a == b,
             (Node::Measured(a, u), Node::Measured(b, v)) => u == v && self.same_formula(a, b),
             _ => {
-                let (a_parts, b_parts) = (a.node.parts(), b.node.parts());
                 std::mem::discriminant(&a.node) == std::mem::discriminant(&b.node)
-                    && a_parts.len() == b_parts.len()
-                    && a_parts.iter().zip(&b_parts).all(|(a, b)| self.same_formula(*a, *b))
+                    && a.node.parts().zip(b.node.parts()).all(|(a, b)| self.same_formula(a, b))
             }
         }
     }
@@ -261,17 +259,20 @@ impl State {
 }
 
 impl Node {
-    pub fn parts(self) -> Vec<NodeId> {
-        match self {
-            Node::Literal | Node::Constant(_) | Node::Variable(_) => vec![],
-            Node::Negative(a) | Node::Square(a) | Node::Cube(a) | Node::Root(a) | Node::Measured(a, _) => vec![a],
+    pub fn parts(self) -> impl Iterator<Item = NodeId> {
+        let parts = match self {
+            Node::Literal | Node::Constant(_) | Node::Variable(_) => [None, None],
+            Node::Negative(a) | Node::Square(a) | Node::Cube(a) | Node::Root(a) | Node::Measured(a, _) => {
+                [Some(a), None]
+            }
             Node::Sum(a, b)
             | Node::Difference(a, b)
             | Node::Product(a, b)
             | Node::Quotient(a, b)
             | Node::Least(a, b)
-            | Node::Greatest(a, b) => vec![a, b],
-        }
+            | Node::Greatest(a, b) => [Some(a), Some(b)],
+        };
+        parts.into_iter().flatten()
     }
 }
 
