@@ -84,7 +84,7 @@ pub(super) fn check<N: Number, W: Workings<N>>(w: &mut W, inputs: &StackedDeflec
         (None, None) => w_own,
     };
     w.say(match (w_inh, w_set) {
-        (None, None) => "both bearings stay where they are: the stacked movement is the beam\u{2019}s own",
+        (None, None) => "neither bearing moves under the loads: the stacked movement is the beam\u{2019}s own",
         (None, Some(_)) => "own and settled movement add up",
         (Some(_), None) => "own and inherited movement add up",
         (Some(_), Some(_)) => "own, inherited and settled movement add up",
@@ -179,8 +179,8 @@ pub(super) fn bearings<N: Number, W: Workings<N>>(
         let on = if bearing.wall { the_wall(&bearing.on) } else { bearing.on.clone() };
         let still = bearing.movement.si() == 0.0;
         w.looked_up("solution of the whole building", glossary::w.of(sub), bearing.movement, move || match still {
-            true => format!("{on} stays where it is"),
-            false => format!("{on} goes down by this much under the bearing"),
+            true => format!("{on} does not move under the loads"),
+            false => format!("{on} goes down by this much at the bearing"),
         })
     };
     (one(left, "left"), one(right, "right"))
