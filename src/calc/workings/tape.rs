@@ -90,10 +90,27 @@ pub(super) struct Record {
 pub(super) enum What {
     Chapter,
     Note,
-    Equation { variable: VariableId, node: NodeId },
-    Value { variable: VariableId },
-    Comparison { left: NodeId, right: NodeId, relation: Relation, dimension: Dimension },
-    Requirement { demand: NodeId, capacity: NodeId, node: NodeId, variable: VariableId },
+    Equation {
+        variable: VariableId,
+        node: NodeId,
+    },
+    Value {
+        variable: VariableId,
+    },
+    /// `ring`: the comparison is itself the result of a check.
+    Comparison {
+        left: NodeId,
+        right: NodeId,
+        relation: Relation,
+        dimension: Dimension,
+        ring: bool,
+    },
+    Requirement {
+        demand: NodeId,
+        capacity: NodeId,
+        node: NodeId,
+        variable: VariableId,
+    },
 }
 
 /// Something that must never be printed; a test walks every check for it.

@@ -25,7 +25,7 @@ pub fn step(step: &Step) -> StepText {
             StepText { lines, result: figure(result) }
         }
         Step::Value { symbol, result } => StepText { lines: vec![self::symbol(symbol)], result: figure(result) },
-        Step::Comparison { left, right, relation, unit, undecided } => {
+        Step::Comparison { left, right, relation, unit, undecided, .. } => {
             let shown = [side(left), side(right)].concat().join(",  ");
             let unit = if unit.name().is_empty() { String::new() } else { format!(" {}", unit.name()) };
             let mut result = format!("{} {} {}{unit}", left.result.decimal, relation.sign(), right.result.decimal);
