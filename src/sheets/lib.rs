@@ -11,6 +11,8 @@ pub mod package;
 pub mod templates;
 pub mod world;
 
+pub mod writers;
+
 mod data;
 mod export;
 mod glue;
