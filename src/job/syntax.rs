@@ -10,6 +10,11 @@ use super::brackets::unclosed;
 use super::findings::Findings;
 use super::registry::Name;
 
+/// More complaints than this are not worth telling one by one: the file is not a job.
+const MOST_COMPLAINTS: usize = 500;
+/// So many keys that stand twice are told with the place where they stood first.
+const MOST_LOOKED_UP: usize = 60;
+
 /// A tree, and the spans that a fault is already about.
 pub(super) struct Parsed<'t> {
     pub root: Spanned<DeTable<'t>>,
@@ -45,7 +50,7 @@ pub(super) fn parse<'t>(text: &'t str, found: &mut Findings) -> Parsed<'t> {
         }
         last_line = line;
         spoiled.push(span);
-        if structural {
+        if structural || spoiled.len() >= MOST_COMPLAINTS {
             whole = false;
             break;
         }
@@ -156,7 +161,11 @@ fn twice(span: Span, part: &str, found: &Findings) -> Fault {
         true => format!("{key} stands twice"),
         false => "a key stands twice".into(),
     };
-    match first_of(span.start, part, found.source.text()) {
+    let first = match found.count() < MOST_LOOKED_UP {
+        true => first_of(span.start, part, found.source.text()),
+        false => None,
+    };
+    match first {
         Some(first) => {
             let line = found.line(&first);
             Fault::new(

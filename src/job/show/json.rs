@@ -2,7 +2,8 @@
 
 use serde::Serialize;
 
-use crate::job::fault::{Fault, Span};
+use crate::job::Reading;
+use crate::job::fault::Span;
 use crate::job::source::Source;
 
 #[derive(Serialize)]
@@ -36,8 +37,10 @@ fn place(source: &Source, span: &Span) -> JsonPlace {
 }
 
 /// A list of findings, in order of lines.
-pub fn faults(source: &Source, findings: &[Fault]) -> serde_json::Value {
-    let findings: Vec<Json> = findings
+pub fn faults(reading: &Reading) -> serde_json::Value {
+    let source = &reading.source;
+    let findings: Vec<Json> = reading
+        .findings
         .iter()
         .map(|fault| {
             let at = fault.span.as_ref().map(|span| place(source, span));

@@ -3,6 +3,7 @@
 use unicode_width::{UnicodeWidthChar, UnicodeWidthStr};
 
 use super::{Screen, shown};
+use crate::job::Reading;
 use crate::job::fault::{Fault, Kind, Span};
 use crate::job::source::Source;
 
@@ -18,14 +19,15 @@ const SHOWN: usize = 50;
 const CONTEXT: usize = 24;
 
 /// All findings of a file, and, where one of them is a fault, the line that says that nothing was computed.
-pub fn faults(source: &Source, findings: &[Fault], screen: Screen) -> String {
+pub fn faults(reading: &Reading, screen: Screen) -> String {
+    let (source, findings) = (&reading.source, &reading.findings);
     let mut lines: Vec<String> = Vec::new();
     for fault in findings.iter().take(SHOWN) {
         lines.extend(one(source, fault, screen));
     }
-    let faults = findings.iter().filter(|f| f.kind() == Kind::Fault).count();
-    let warnings = findings.len() - faults;
-    let more = findings.len().saturating_sub(SHOWN);
+    let warnings = reading.warnings();
+    let faults = reading.faults() + reading.unlisted;
+    let more = (faults + warnings).saturating_sub(SHOWN);
     let counted = |n: usize, word: &str| match n {
         1 => format!("1 {word}"),
         n => format!("{n} {word}s"),
@@ -41,7 +43,7 @@ pub fn faults(source: &Source, findings: &[Fault], screen: Screen) -> String {
         last.push(format!("{more} more than are shown"));
     }
     if faults > 0 {
-        lines.push(format!("not read: {}; nothing was computed", last.join(", ")));
+        lines.extend(wrapped(&format!("not read: {}; nothing was computed", last.join(", ")), 0, screen));
     } else if more > 0 {
         lines.push(last.join(", "));
     }
