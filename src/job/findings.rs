@@ -1,6 +1,7 @@
 //! What the reader has found so far. Whatever reads a part of a job adds to it and goes on.
 
 use super::fault::{Fault, Kind, Span};
+use super::registry::Name;
 use super::source::Source;
 
 /// Near names are looked for until there are this many findings: nobody reads on, and the search would cost too much.
@@ -55,10 +56,15 @@ impl<'s> Findings<'s> {
         self.list.len()
     }
 
-    /// In order of places, what is about the whole file first; and how many more there are.
-    pub fn in_order(mut self) -> (Vec<Fault>, usize) {
+    /// In order of places, what is about the whole file first. Those that were not kept are counted at the end.
+    pub fn in_order(mut self) -> Vec<Fault> {
         in_order(&mut self.list);
-        (self.list, self.unlisted)
+        if self.unlisted > 0 {
+            let last = self.list.last().and_then(|fault| fault.span.clone());
+            let fact = format!("{} faults and warnings more", self.unlisted);
+            self.list.push(Fault::new(Name::TooMany, last, fact, "mend those above first"));
+        }
+        self.list
     }
 }
 

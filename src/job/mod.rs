@@ -55,8 +55,6 @@ pub struct Job {
 pub struct Reading {
     pub source: Source,
     pub findings: Vec<Fault>,
-    /// Findings beyond some thousands, which are counted only.
-    pub unlisted: usize,
     pub job: Option<Job>,
 }
 
@@ -90,7 +88,7 @@ impl Job {
 impl Reading {
     /// A reading that ended before there was a text.
     pub(crate) fn refused(file: &str, fault: Fault) -> Reading {
-        Reading { source: Source::new(file, ""), findings: vec![fault], unlisted: 0, job: None }
+        Reading { source: Source::new(file, ""), findings: vec![fault], job: None }
     }
 
     /// Takes in what only the calculation could find: the job is at fault after all.
@@ -100,12 +98,10 @@ impl Reading {
         findings::in_order(&mut self.findings);
     }
 
-    /// How many faults are listed.
     pub fn faults(&self) -> usize {
         self.findings.iter().filter(|f| f.kind() == Kind::Fault).count()
     }
 
-    /// How many warnings are listed.
     pub fn warnings(&self) -> usize {
         self.findings.len() - self.faults()
     }
@@ -129,14 +125,14 @@ fn read_in(bytes: &[u8], file_name: &str, folder: Option<&std::path::Path>) -> R
     let mut found = Findings::new(&source);
     let made = understand(&source, folder, &mut found);
     let at_fault = found.has_faults();
-    let (findings, unlisted) = found.in_order();
+    let findings = found.in_order();
     let job = made.filter(|_| !at_fault).map(|(meta, building, origins)| Job {
         meta,
         building,
         source: source.clone(),
         origins,
     });
-    Reading { source, findings, unlisted, job }
+    Reading { source, findings, job }
 }
 
 fn understand<'s>(

@@ -5,8 +5,8 @@ use std::ops::Range;
 use toml::Spanned;
 use toml::de::{DeTable, Error};
 
-use super::fault::{Fault, Span};
 use super::brackets::unclosed;
+use super::fault::{Fault, Span};
 use super::findings::Findings;
 use super::registry::Name;
 
@@ -130,9 +130,7 @@ fn fault(error: &Error, span: Span, text: &str, found: &Findings) -> Fault {
                 }
             }
         }
-        "string values must be quoted" => {
-            syntax("a text without quotes", "put it in double quotes".into())
-        }
+        "string values must be quoted" => syntax("a text without quotes", "put it in double quotes".into()),
         "invalid basic string" | "invalid literal string" if expected == "`\"`" || expected == "`'`" => {
             syntax("a text that does not end on its line", "close it with a double quote".into())
         }

@@ -60,7 +60,10 @@ fn what_a_job_says_of_itself() {
 fn what_is_not_said_takes_its_default() {
     let job = good("smallest.toml");
     let meta = job.meta;
-    assert_eq!((meta.site, meta.client, meta.practice, meta.engineer, meta.checker), (None, None, None, None, None));
+    assert_eq!(
+        (meta.site, meta.client, meta.practice, meta.engineer, meta.checker),
+        (None, None, None, None, None)
+    );
     assert_eq!((meta.logo, meta.accent, meta.drawing_sheets, meta.lang), (None, None, Paper::A4, Lang::default()));
     assert!(meta.drawings.is_empty());
     let basis = job.building.basis;
@@ -140,7 +143,10 @@ fn bearings_on_beams_take_their_defaults() {
     for (bearing, lands) in building.beams[1].bearings.iter().zip([0.1, 0.0]) {
         assert_eq!(bearing.on, Carrier::Beam { beam: 0, lands: m(lands) });
         assert_eq!((bearing.joint, bearing.joint_defaulted), (Joint::OnTopFlange, true));
-        assert_eq!((bearing.end_restraint, bearing.end_restraint_defaulted), (EndRestraint::BottomFlangeHeld, true));
+        assert_eq!(
+            (bearing.end_restraint, bearing.end_restraint_defaulted),
+            (EndRestraint::BottomFlangeHeld, true)
+        );
         assert_eq!((bearing.bearing_length, bearing.bearing_length_defaulted), (None, false));
     }
 }
@@ -149,7 +155,10 @@ fn bearings_on_beams_take_their_defaults() {
 fn rows_of_loads() {
     let building = good("every-key.toml").building;
     let [lights, parapet, gutter, hanger] = building.beams[0].loads.as_slice() else { panic!() };
-    assert_eq!((lights.what.as_str(), lights.stage, lights.stage_defaulted), ("north lights, both sides", Stage::Before, false));
+    assert_eq!(
+        (lights.what.as_str(), lights.stage, lights.stage_defaulted),
+        ("north lights, both sides", Stage::Before, false)
+    );
     assert_eq!((lights.height, &lights.wind_case), (LoadHeight::ShearCentre, &WindCase("from the race".into())));
     assert!(matches!(lights.load, Load::Area { build_up: 0, width, from, to }
         if width == (m(2.6), m(0.0)) && from == m(0.45) && to == m(8.7)));
@@ -159,12 +168,18 @@ fn rows_of_loads() {
     assert_eq!((gutter.offset, &gutter.wind_case), (m(0.06), &WindCase::default()));
     let Load::Line { direct, from, to } = &gutter.load else { panic!() };
     assert_eq!((*from, *to), (m(0.0), m(9.3)));
-    assert_eq!((direct.permanent.unwrap().si(), direct.snow.unwrap().si(), direct.wind.unwrap().si()), (350.0, 1100.0, -250.0));
+    assert_eq!(
+        (direct.permanent.unwrap().si(), direct.snow.unwrap().si(), direct.wind.unwrap().si()),
+        (350.0, 1100.0, -250.0)
+    );
     assert!(matches!(direct.imposed, Some((Category::C, load)) if load.si() == 900.0));
     assert_eq!(hanger.height, LoadHeight::BottomFlange);
     let Load::Point { direct, at } = &hanger.load else { panic!() };
     assert_eq!(*at, m(6.2));
-    assert_eq!((direct.permanent.unwrap().si(), direct.snow.unwrap().si(), direct.wind.unwrap().si()), (2750.0, 0.0, 400.0));
+    assert_eq!(
+        (direct.permanent.unwrap().si(), direct.snow.unwrap().si(), direct.wind.unwrap().si()),
+        (2750.0, 0.0, 400.0)
+    );
     assert!(matches!(direct.imposed, Some((Category::G, load)) if load.si() == 3200.0));
 }
 
@@ -178,7 +193,10 @@ fn limits_in_force() {
     assert_eq!(of(valley, Movement::Tilt).bounds, [Bound::OneIn(600.0)]);
     assert_eq!(of(valley, Movement::Tilt).from, LimitFrom::Given { reason: None });
     assert_eq!(of(valley, Movement::After).from, LimitFrom::Set(LimitSet::GlazedDoors));
-    assert_eq!((of(valley, Movement::Total).bounds, of(valley, Movement::Total).from), (vec![Bound::SpanOver(300.0)], given.clone()));
+    assert_eq!(
+        (of(valley, Movement::Total).bounds, of(valley, Movement::Total).from),
+        (vec![Bound::SpanOver(300.0)], given.clone())
+    );
     assert_eq!(of(transfer, Movement::After).bounds, [Bound::Length(m(0.0095))]);
     assert_eq!(of(transfer, Movement::Variable).bounds, [Bound::SpanOver(400.0), Bound::Length(m(0.012))]);
     assert_eq!(of(transfer, Movement::Stacked).bounds, [Bound::SpanOver(250.0), Bound::Length(m(0.022))]);
@@ -199,7 +217,9 @@ fn odd_writing_means_the_same() {
     // 20 mm apart exactly, though 0.1 - 0.08 is less than 0.02 in f64.
     assert_eq!((beam.bearings[0].at, beam.bearings[1].at), (m(0.08), m(0.1)));
     assert!(matches!(beam.loads[0].load, Load::Wall { height, .. } if height == (m(0.0), m(0.5))));
-    assert!(matches!(&beam.loads[1].load, Load::Point { direct, at } if *at == m(0.1) && direct.permanent.is_none()));
+    assert!(
+        matches!(&beam.loads[1].load, Load::Point { direct, at } if *at == m(0.1) && direct.permanent.is_none())
+    );
     assert!(matches!(&beam.loads[2].load, Load::Line { direct, .. } if direct.permanent.unwrap().si() == 0.0));
 }
 
@@ -261,7 +281,9 @@ fn every_later_key_is_refused_by_name() {
 
 #[test]
 fn the_same_number_in_other_units() {
-    for (typed, si) in [("2.10 m", 2.1), ("2100mm", 2.1), ("2.1e3 mm", 2.1), ("0.1 m", 0.1), ("60 m", 60.0), ("3.7 m", 3.7)] {
+    for (typed, si) in
+        [("2.10 m", 2.1), ("2100mm", 2.1), ("2.1e3 mm", 2.1), ("0.1 m", 0.1), ("60 m", 60.0), ("3.7 m", 3.7)]
+    {
         let beam = &small(&[("2.10 m", typed)]).building.beams[0];
         assert_eq!((beam.length, beam.bearings[1].at), (m(si), m(si)), "{typed}");
     }

@@ -2,8 +2,7 @@
 
 use serde::Serialize;
 
-use crate::job::Reading;
-use crate::job::fault::Span;
+use crate::job::fault::{Fault, Span};
 use crate::job::source::Source;
 
 #[derive(Serialize)]
@@ -37,10 +36,8 @@ fn place(source: &Source, span: &Span) -> JsonPlace {
 }
 
 /// A list of findings, in order of lines.
-pub fn faults(reading: &Reading) -> serde_json::Value {
-    let source = &reading.source;
-    let findings: Vec<Json> = reading
-        .findings
+pub fn faults(source: &Source, findings: &[Fault]) -> serde_json::Value {
+    let findings: Vec<Json> = findings
         .iter()
         .map(|fault| {
             let at = fault.span.as_ref().map(|span| place(source, span));

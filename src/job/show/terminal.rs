@@ -3,7 +3,6 @@
 use unicode_width::{UnicodeWidthChar, UnicodeWidthStr};
 
 use super::{Screen, shown};
-use crate::job::Reading;
 use crate::job::fault::{Fault, Kind, Span};
 use crate::job::source::Source;
 
@@ -21,15 +20,14 @@ const UNCUT: usize = 4000;
 const CONTEXT: usize = 24;
 
 /// All findings of a file, and, where one of them is a fault, the line that says that nothing was computed.
-pub fn faults(reading: &Reading, screen: Screen) -> String {
-    let (source, findings) = (&reading.source, &reading.findings);
+pub fn faults(source: &Source, findings: &[Fault], screen: Screen) -> String {
     let mut lines: Vec<String> = Vec::new();
     for fault in findings.iter().take(SHOWN) {
         lines.extend(one(source, fault, screen));
     }
-    let warnings = reading.warnings();
-    let faults = reading.faults() + reading.unlisted;
-    let more = (faults + warnings).saturating_sub(SHOWN);
+    let faults = findings.iter().filter(|f| f.kind() == Kind::Fault).count();
+    let warnings = findings.len() - faults;
+    let more = findings.len().saturating_sub(SHOWN);
     let counted = |n: usize, word: &str| match n {
         1 => format!("1 {word}"),
         n => format!("{n} {word}s"),
