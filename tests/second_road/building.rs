@@ -27,7 +27,10 @@ pub struct Building {
 
 impl Building {
     pub fn new(text: &str) -> Building {
-        let job = Job::read(text);
+        Building::of(Job::read(text))
+    }
+
+    pub fn of(job: Job) -> Building {
         let contributions = contributions(&job);
         let combinations = Combinations::new(&job, &contributions);
         let frame = Frame::new(&job);
