@@ -68,11 +68,9 @@ pub fn cases() -> Vec<Case> {
 /// What a results file gets wrong of a case.
 pub fn misses(case: &Case, results: &Value) -> Vec<String> {
     let miss = |expected: &Expected| {
-        let figure = expected.path.split('.').fold(Some(results), |value, key| {
-            value.and_then(|value| match key.parse::<usize>() {
-                Ok(index) => value.get(index),
-                Err(_) => value.get(key),
-            })
+        let figure = expected.path.split('.').try_fold(results, |value, key| match key.parse::<usize>() {
+            Ok(index) => value.get(index),
+            Err(_) => value.get(key),
         });
         // A tilt may carry the sign of the side that goes down; its size is what is known here.
         let tilt = expected.path.ends_with("tilt");
