@@ -82,7 +82,7 @@ pub fn source(package: &Package) -> Result<Files, Fault> {
     for (name, text) in templates::in_force(&package.templates) {
         sources.push((format!("/templates/{name}"), text.to_string()));
     }
-    let json = serde_json::to_vec(&data).map_err(|e| Fault::of(format!("the data could not be written: {e}")))?;
+    let json = data.to_json().map_err(|e| Fault::of(format!("the data could not be written: {e}")))?;
     let mut bytes = vec![
         (DATA.to_string(), json),
         (ATTACHED[0].path.to_string(), package.job_text.as_bytes().to_vec()),

@@ -17,10 +17,6 @@ pub const FILES: [(&str, &[u8]); 7] = [
     ("IBMPlexMath-Regular.ttf", include_bytes!("../../fonts/IBMPlexMath-Regular.ttf")),
 ];
 
-/// Faces that print words: a character has to be in all of them to look the same in every weight.
-const WORDS: [&str; 3] = ["IBMPlexSans-Regular.ttf", "IBMPlexSans-Medium.ttf", "IBMPlexSans-SemiBold.ttf"];
-const LISTING: [&str; 1] = ["IBMPlexMono-Regular.ttf"];
-
 static STORE: LazyLock<FontStore> = LazyLock::new(|| {
     let mut store = FontStore::new();
     for (_, data) in FILES {
@@ -37,27 +33,18 @@ pub(crate) fn store() -> &'static FontStore {
     &STORE
 }
 
-/// Whether a character can be printed as itself wherever words are printed. Control characters and those that turn
-/// the direction of reading are not: they would print as nothing and change what is read.
+/// Whether a character can be printed as itself. Control characters and those that turn the direction of reading
+/// cannot: they would print as nothing and change what is read.
 pub fn prints(character: char) -> bool {
-    !is_hidden(character) && covered(character, &WORDS)
-}
-
-/// Whether a character can be printed as itself in a listing.
-pub fn prints_in_listing(character: char) -> bool {
-    !is_hidden(character) && covered(character, &LISTING)
+    let code = u32::from(character);
+    let mut fonts = (0..FILES.len()).filter_map(|n| STORE.font(n));
+    !is_hidden(character) && fonts.any(|font| font.info().coverage.contains(code))
 }
 
 fn is_hidden(character: char) -> bool {
     character.is_control()
         || matches!(character, '\u{ad}' | '\u{61c}' | '\u{200b}'..='\u{200f}' | '\u{2028}'..='\u{202f}'
             | '\u{2060}'..='\u{206f}' | '\u{feff}' | '\u{fe00}'..='\u{fe0f}' | '\u{e0000}'..='\u{e0fff}')
-}
-
-fn covered(character: char, faces: &[&str]) -> bool {
-    let code = u32::from(character);
-    let face = |wanted: &str| FILES.iter().position(|(name, _)| *name == wanted).and_then(|n| STORE.font(n));
-    faces.iter().all(|name| face(name).is_some_and(|font| font.info().coverage.contains(code)))
 }
 
 /// Replaces what cannot be printed by U+FFFD and says how many characters that were.
@@ -102,6 +89,6 @@ mod tests {
         for c in ['\u{1f}', '\u{202e}', '\u{1f3d7}', '\u{200d}', '\n', '\u{5d0}'] {
             assert!(!prints(c), "{:x}", c as u32);
         }
-        assert!(prints(STAND_IN) && prints_in_listing(STAND_IN));
+        assert!(prints(STAND_IN));
     }
 }

@@ -4,12 +4,14 @@
 //! parts in their order, the templates under `templates/` place them on paper, and Typst sets them. The same package
 //! always gives the same bytes: fonts are embedded, the only date is the job's, no file, clock or network is read.
 
+pub mod drawings;
 pub mod fault;
 pub mod fonts;
 pub mod logo;
 pub mod package;
 pub mod templates;
 pub mod world;
+pub mod writers;
 
 pub mod writers;
 

@@ -10,7 +10,25 @@ macro_rules! embedded {
     };
 }
 
-embedded!["data.typ", "look.typ", "sheet.typ", "cover.typ"];
+embedded![
+    "data.typ",
+    "look.typ",
+    "text.typ",
+    "sheet.typ",
+    "tables.typ",
+    "workings.typ",
+    "cover.typ",
+    "basis.typ",
+    "loads.typ",
+    "load-path.typ",
+    "governing.typ",
+    "member.typ",
+    "stacked.typ",
+    "cautions.typ",
+    "record.typ",
+    "drawings/ink.typ",
+    "drawings/drawings.typ",
+];
 
 /// Templates that stand in for embedded ones: name under `templates/` (such as `cover.typ`) to text. A name that is
 /// not embedded is a further file that an overriding template may import.

@@ -29,7 +29,7 @@ pub use account::account;
 pub use bending_with_shear::Reduced;
 pub use combined::Combined;
 pub use inputs::{Inputs, Steel};
-pub use section::Class;
+pub use section::{Class, class_in_bending};
 
 use crate::quantity::{Q, SecondMoment};
 use crate::results::{CheckUnit, Verdict};

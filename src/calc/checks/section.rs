@@ -17,7 +17,7 @@ use crate::quantity::{Force, Length, Moment, Ratio, Stress, Volume, max, min};
 use crate::sections::Section;
 use crate::workings::lines::{quantities, step};
 use crate::workings::unit::Unit;
-use crate::workings::{Number, Workings, glossary};
+use crate::workings::{Number, Silent, Workings, glossary};
 
 quantities! {
     /// Dimensions and moduli of a rolled section.
@@ -124,6 +124,16 @@ pub(super) fn class<N: Number, W: Workings<N>>(w: &mut W, s: &Yielding<N>) -> Cl
         Class::Four
     };
     flange.max(web)
+}
+
+/// The class of a section for bending about its major axis (EN 1993-1-1 Table 5.2).
+///
+/// # Errors
+/// Why the section is not verified, in words: it is thicker than the table of yield strengths goes.
+pub fn class_in_bending(steel: &Steel) -> Result<Class, &'static str> {
+    let w = &mut Silent;
+    let yielding = yielding::<f64, _>(w, steel).map_err(Refusal::reason)?;
+    Ok(class(w, &yielding))
 }
 
 /// Depth of the web, which must not be so slender that it could buckle in shear.

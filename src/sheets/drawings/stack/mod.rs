@@ -1,0 +1,371 @@
+//! A chain of beams with its movements, level by level: each beam sags from what it stands on, and what it stands
+//! on sags too. Movements print full size wherever they can.
+
+mod paint;
+
+use sagledger_calc::building::{Building, Carrier};
+use sagledger_calc::results::{Chain, Curve, Results};
+
+use super::diagrams::listed;
+use super::figures::{fixed, place, tenth};
+use super::labels::{Column, Placer, WIDE};
+use super::layout::{Layout, Member, Page, Paper, lay_out, members};
+use super::letters::{Face, Run, run, words};
+use super::scene::{Drawing, Rect};
+use super::shape;
+
+const PAPER: Paper =
+    Paper { width: 113.0, rows: 5, gap: 24.0, clear: 3.0, scales: &[50.0, 100.0, 200.0, 500.0, 1000.0] };
+/// Left edge of what is laid out.
+const LEFT: f64 = 3.0;
+/// Level of the first beam from the top.
+const FIRST: f64 = 7.0;
+/// Distance of levels, with figures and on the cover.
+const LEVEL: f64 = 43.0;
+const COVER_LEVEL: f64 = 25.0;
+/// Greatest height of a drawing on a sheet of its own, and on the cover.
+const TALLEST: f64 = 232.0;
+const TALLEST_COVER: f64 = 78.0;
+/// Movements that are neither lost nor too large when printed full size, in mm on paper.
+const SEEN: f64 = 2.0;
+const LARGE: f64 = 36.0;
+
+/// What is drawn of a chain; m throughout, movements downward positive.
+#[derive(Clone, Debug)]
+pub struct Stack {
+    /// All members of the building, so that indices hold; only `beams` are drawn.
+    pub places: Vec<Member>,
+    pub beams: Vec<Moved>,
+    /// The combination that is drawn.
+    pub combination: String,
+    pub governing: Option<Governing>,
+}
+
+/// A beam of the chain.
+#[derive(Clone, Debug)]
+pub struct Moved {
+    pub member: usize,
+    pub mark: String,
+    /// What its seats stand on, and how far these move.
+    pub on: Vec<String>,
+    pub seats: Vec<f64>,
+    pub own: Curve,
+    pub stacked: Curve,
+}
+
+/// The point that is written out.
+#[derive(Clone, Debug)]
+pub struct Governing {
+    pub member: usize,
+    pub at: f64,
+    pub own: f64,
+    pub inherited: f64,
+    pub settled: f64,
+    pub total: f64,
+    pub limit: Option<f64>,
+}
+
+impl Stack {
+    /// A chain of a calculated building.
+    pub fn of(building: &Building, results: &Results, chain: &Chain) -> Stack {
+        let name = |on: &Carrier| match on {
+            Carrier::Wall(wall) => building.walls.get(*wall).map_or_else(String::new, |w| w.name.clone()),
+            Carrier::Beam { beam, .. } => building.beams.get(*beam).map_or_else(String::new, |b| b.mark.clone()),
+        };
+        let beams = chain.curves.iter().filter_map(|curve| {
+            let beam = building.beams.get(curve.beam)?;
+            Some(Moved {
+                member: curve.beam,
+                mark: beam.mark.clone(),
+                on: beam.bearings.iter().map(|b| name(&b.on)).collect(),
+                seats: curve.bearings.iter().map(|m| m.si()).collect(),
+                own: curve.own.clone(),
+                stacked: curve.stacked.clone(),
+            })
+        });
+        let governing = results.beams.get(chain.governing_beam).map(|found| {
+            let stacked = found.movements.governing.as_ref().unwrap_or(&found.movements.stacked);
+            Governing {
+                member: chain.governing_beam,
+                at: stacked.total.at.si(),
+                own: stacked.own.si(),
+                inherited: stacked.inherited.si(),
+                settled: stacked.settled.si(),
+                total: stacked.total.value.si(),
+                limit: stacked.limit.map(|l| l.si()),
+            }
+        });
+        let combination = results.combinations.get(chain.characteristic);
+        Stack {
+            places: members(building),
+            beams: beams.collect(),
+            combination: combination.map_or_else(String::new, |c| c.name(&results.actions)),
+            governing,
+        }
+    }
+
+    fn moved(&self, member: usize) -> Option<&Moved> {
+        self.beams.iter().find(|b| b.member == member)
+    }
+
+    /// Greatest movements down and up over some beams, in mm.
+    fn extent(&self, members: impl Iterator<Item = usize>) -> (f64, f64) {
+        let ranges = members.filter_map(|m| self.moved(m)).map(|b| shape::range(&b.stacked));
+        ranges
+            .fold((0.0, 0.0), |(down, up), (least, most)| (f64::max(down, most * 1e3), f64::max(up, -least * 1e3)))
+    }
+
+    /// mm on paper for a mm of movement: full size unless that is too small to see or too large to print.
+    fn magnification(&self) -> f64 {
+        let (down, up) = self.extent(self.beams.iter().map(|b| b.member));
+        let most = down + up;
+        if most > LARGE {
+            [0.5, 0.2, 0.1, 0.05, 0.02, 0.01].into_iter().find(|k| k * most <= LARGE).unwrap_or(0.005)
+        } else if most < SEEN && most > 0.0 {
+            [2.0, 5.0, 10.0].into_iter().find(|k| k * most >= SEEN).unwrap_or(10.0)
+        } else {
+            1.0
+        }
+    }
+
+    /// The chain with its figures, on as many drawings as it needs.
+    pub fn drawings(&self) -> Vec<Drawing> {
+        self.pages(LEVEL, TALLEST, true)
+    }
+
+    /// The same without figures, for the cover: the drawing that shows the governing beam.
+    pub fn cover(&self) -> Option<Drawing> {
+        let pages = self.pages(COVER_LEVEL, TALLEST_COVER, false);
+        pages.into_iter().next()
+    }
+
+    fn pages(&self, level: f64, tallest: f64, figures: bool) -> Vec<Drawing> {
+        let k = self.magnification();
+        let chosen: Vec<usize> = self.beams.iter().map(|b| b.member).collect();
+        let (down, up) = self.extent(chosen.iter().copied());
+        let air = if figures { 17.0 } else { 9.0 };
+        let pitch = level.max((down + up) * k + air);
+        let foot = down * k + if figures { 10.0 } else { 5.0 };
+        let rows = ((tallest - FIRST - up * k - foot) / pitch).floor().max(0.0) as usize + 1;
+        let paper = Paper { rows, ..PAPER };
+        let layout = lay_out(&self.places, &chosen, &paper);
+        let mut pages: Vec<&Page> = layout.pages.iter().collect();
+        if !figures && let Some(governing) = &self.governing {
+            pages.sort_by_key(|p| p.find(governing.member).is_none());
+        }
+        let drawings = pages.into_iter().map(|page| {
+            let height = FIRST + up * k + pitch * (page.rows.max(1) - 1) as f64 + foot;
+            let kind = if figures { "stack-drawing" } else { "cover-picture" };
+            let sheet = Sheet {
+                stack: self,
+                layout: &layout,
+                page,
+                k,
+                first: FIRST + up * k,
+                pitch,
+                drawing: Drawing::new(kind, WIDE, height),
+                placer: Placer::new(Rect::new(-1.5, 0.0, 122.5, height)),
+                figures,
+            };
+            sheet.draw()
+        });
+        drawings.collect()
+    }
+}
+
+struct Sheet<'a> {
+    stack: &'a Stack,
+    layout: &'a Layout,
+    page: &'a Page,
+    /// mm on paper for a mm of movement.
+    k: f64,
+    /// Level of the first row.
+    first: f64,
+    pitch: f64,
+    drawing: Drawing,
+    placer: Placer,
+    figures: bool,
+}
+
+impl Sheet<'_> {
+    fn draw(mut self) -> Drawing {
+        let page = self.page;
+        let beams: Vec<usize> = page.placed.iter().map(|p| p.member).collect();
+        for beam in &beams {
+            self.lines(*beam);
+        }
+        let governing = self.stack.governing.clone().filter(|g| beams.contains(&g.member));
+        if self.figures {
+            if let Some(governing) = &governing {
+                self.governing_lines(governing);
+            }
+            beams.iter().for_each(|b| self.mm_ruler(*b));
+        }
+        beams.iter().for_each(|b| self.mark(*b));
+        if self.figures {
+            if let Some(governing) = &governing {
+                self.governing_figures(governing);
+            }
+            beams.iter().for_each(|b| self.landing_figures(*b));
+            let others = beams.iter().filter(|b| governing.as_ref().is_none_or(|g| g.member != **b));
+            others.for_each(|b| self.greatest(*b));
+            self.column(governing.as_ref());
+        } else {
+            self.caption();
+        }
+        self.drawing.alt = self.alt(&beams);
+        self.drawing
+    }
+
+    /// What the scales are, in words.
+    fn scales(&self) -> (String, String) {
+        let scale = fixed(self.layout.scale, 0);
+        let factor = self.k * self.layout.scale;
+        let spans = format!("Spans 1:{scale}; levels are not to scale.");
+        let text = format!(
+            "{spans} Movements are drawn {} times the scale of the spans, which prints them",
+            fixed(factor, 0)
+        );
+        match self.k {
+            1.0 => (format!("{text} full size:"), "one millimetre on paper is one millimetre of movement.".into()),
+            k if k > 1.0 => {
+                (format!("{text} {k} times full size:"), format!("{k} mm on paper are 1 mm of movement."))
+            }
+            k => (
+                format!("{text} smaller than they are:"),
+                format!("1 mm on paper is {} mm of movement.", fixed(1.0 / k, 0)),
+            ),
+        }
+    }
+
+    fn column(&mut self, governing: Option<&Governing>) {
+        let mut column = Column::new();
+        let (scales, promise) = self.scales();
+        let mut lines: Vec<Vec<Run>> = column.wrap(Face::Regular, &scales).into_iter().map(words).collect();
+        lines.extend(column.wrap(Face::SemiBold, &promise).into_iter().map(|l| vec![run(Face::Medium, l)]));
+        column.note(&mut self.drawing, 0.0, lines);
+        let mut placed = self.page.placed.clone();
+        placed.sort_by(|a, b| a.row.cmp(&b.row).then(a.x.total_cmp(&b.x)));
+        for p in placed {
+            let level = self.level(p.row) + if p.row == 0 { 0.0 } else { 6.0 };
+            for (title, body) in self.sums(p.member, governing) {
+                let mut lines: Vec<Vec<Run>> = Vec::new();
+                lines.extend(column.wrap(Face::Medium, &title).into_iter().map(|l| vec![run(Face::Medium, l)]));
+                for line in body {
+                    lines.extend(column.wrap(Face::Regular, &line).into_iter().map(words));
+                }
+                column.note(&mut self.drawing, level, lines);
+            }
+        }
+        self.drawing.height = self.drawing.height.max(column.next() - 3.0);
+    }
+
+    /// What is written beside a beam: the governing point, or each landing's movement, as sums.
+    fn sums(&self, member: usize, governing: Option<&Governing>) -> Vec<(String, Vec<String>)> {
+        let Some(beam) = self.stack.moved(member) else { return vec![] };
+        let mut list = Vec::new();
+        if let Some(g) = governing.filter(|g| g.member == member) {
+            let from = match (self.stack.places[member].seats.first(), beam.on.first()) {
+                (Some(seat), Some(on)) if seat.at == 0.0 && seat.on.is_none() => {
+                    format!("from the {}", on.trim_start_matches("the "))
+                }
+                (Some(seat), Some(on)) if seat.at == 0.0 => format!("from {on}"),
+                _ => "from its first end".to_string(),
+            };
+            let mut body = vec![format!("{}, {} {from}", beam.mark, place(g.at))];
+            body.push(sum(g.own, g.inherited, g.settled, g.total));
+            if let Some(limit) = g.limit {
+                body.push(format!("limit {} mm", tenth(limit * 1e3)));
+            }
+            list.push(("Governing point".to_string(), body));
+        }
+        for other in &self.stack.beams {
+            for seat in &self.stack.places[other.member].seats {
+                let Some((_, lands)) = seat.on.filter(|(carrier, _)| *carrier == member) else { continue };
+                let own = shape::value_at(&beam.own, lands);
+                let total = shape::value_at(&beam.stacked, lands);
+                let title = format!("{} at {}, {} lands", beam.mark, place(lands), other.mark);
+                list.push((title, vec![sum(own, total - own, 0.0, total)]));
+            }
+        }
+        list
+    }
+
+    fn caption(&mut self) {
+        let mut column = Column::new();
+        let scale = fixed(self.layout.scale, 0);
+        let text = match self.k {
+            1.0 => format!("Spans 1:{scale}. Movements printed full size: one millimetre is one millimetre."),
+            _ => format!(
+                "Spans 1:{scale}. Movements {} times the scale of the spans.",
+                fixed(self.k * self.layout.scale, 0)
+            ),
+        };
+        let lines: Vec<Vec<Run>> = column.wrap(Face::Regular, &text).into_iter().map(words).collect();
+        let top = self.drawing.height - 3.6 * lines.len() as f64 - 4.0;
+        column.note(&mut self.drawing, top.max(0.0), lines);
+    }
+
+    fn alt(&self, beams: &[usize]) -> String {
+        let told =
+            beams.iter().filter_map(|b| {
+                let beam = self.stack.moved(*b)?;
+                let seats =
+                    self.stack.places[*b].seats.iter().zip(&beam.on).zip(&beam.seats).map(|((seat, on), moved)| {
+                        format!("{} mm at {} on {on}", tenth(moved * 1e3), place(seat.at))
+                    });
+                let seats = listed(seats);
+                let most = paint::greatest(&beam.stacked)?;
+                Some(format!(
+                    "{}: bearings move {seats}; greatest movement {} mm at {}.",
+                    beam.mark,
+                    tenth(most.value * 1e3),
+                    place(most.at)
+                ))
+            });
+        let told = told.collect::<Vec<_>>().join(" ");
+        let governing = self.stack.governing.as_ref().filter(|g| beams.contains(&g.member)).map(|g| {
+            let mark = self.stack.moved(g.member).map_or("", |b| b.mark.as_str());
+            let limit = g.limit.map_or_else(String::new, |l| format!(", limit {} mm", tenth(l * 1e3)));
+            format!(
+                " Governing point: {mark} at {}, {}{limit}.",
+                place(g.at),
+                sum(g.own, g.inherited, g.settled, g.total)
+            )
+        });
+        let (scales, promise) = self.scales();
+        format!(
+            "Movements of the chain for {}. {told}{} {scales} {promise}",
+            self.stack.combination,
+            governing.unwrap_or_default()
+        )
+    }
+}
+
+/// "own 10.4 + inherited 6.2 = 16.6", in mm, with as many decimals as make the sum right.
+fn sum(own: f64, inherited: f64, settled: f64, total: f64) -> String {
+    let terms = [own * 1e3, inherited * 1e3, settled * 1e3, total * 1e3];
+    let adds = |decimals: i32| {
+        let unit = (0..decimals).fold(1.0, |u: f64, _| u * 10.0);
+        let whole = terms.map(|t| (t * unit).round());
+        (whole[0] + whole[1] + whole[2] - whole[3]).abs() < 0.5
+    };
+    let decimals = (1..=3).find(|d| adds(*d)).unwrap_or(1);
+    let text = terms.map(|t| fixed(t, decimals));
+    let still = |n: usize| super::figures::is_zero(&fixed(terms[n], decimals));
+    let term = |name: &str, n: usize| match text[n].strip_prefix('\u{2212}') {
+        Some(size) => format!(" \u{2212} {name} {size}"),
+        None => format!(" + {name} {}", text[n]),
+    };
+    let mut line = format!("own {}", text[0]);
+    if still(1) && still(2) {
+        return format!("{line} mm");
+    }
+    if !still(1) {
+        line.push_str(&term("inherited", 1));
+    }
+    if !still(2) {
+        line.push_str(&term("settled", 2));
+    }
+    format!("{line} = {}", text[3])
+}

@@ -1,0 +1,7 @@
+//! What is drawn, tested as data and as set pages.
+
+mod buildings;
+mod chains;
+mod diagrams;
+mod random;
+mod set;
