@@ -13,8 +13,6 @@ pub mod templates;
 pub mod world;
 pub mod writers;
 
-pub mod writers;
-
 mod data;
 mod export;
 mod glue;
