@@ -164,7 +164,7 @@ fn permanent(results: &Value, beam: usize, bearing: usize) -> f64 {
 /// Movement of the place where a probe lands, m, with its sign.
 fn movement(results: &Value, probe: usize) -> f64 {
     let probe = beam(results, ["probe 1", "probe 2"][probe]);
-    let size = number(&probe["tilt"]) * rewrite::PROBE;
+    let size = number(&probe["tilt"]).abs() * rewrite::PROBE;
     // The probe is short and stiff: it moves most where it lands, unless that moves less than the probe bends, 1e-8 m.
     size * number(&probe["deflection_mm"]["stacked_total"]).signum()
 }

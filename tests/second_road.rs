@@ -7,6 +7,7 @@ mod second_road;
 use generate::building::{Traits, building};
 use second_road::building::Building;
 use second_road::compare::differences;
+use second_road::required;
 use std::ops::Range;
 
 /// Seeds of the sweep, in parts that run beside each other.
@@ -26,7 +27,9 @@ fn sweep(seeds: Range<u64>) {
             }
         };
         let results = serde_json::from_str(&results).expect("a results file is JSON");
-        let found = differences(&Building::new(&text), &results);
+        let building = Building::new(&text);
+        let mut found = differences(&building, &results);
+        found.extend(required::differences(&building, &results));
         wrong += usize::from(!found.is_empty());
         all.extend(found.into_iter().map(|line| format!("seed {seed}: {line}")));
     }

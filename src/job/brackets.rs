@@ -9,10 +9,10 @@ pub(super) fn unclosed(text: &str) -> Option<Span> {
     let mut at = 0;
     for line in text.split_inclusive('\n') {
         let start = line.trim_start();
-        if let Some((bracket, '[')) = open.last().copied() {
-            if is_header(start) || is_key(start) {
-                return Some(bracket..bracket + 1);
-            }
+        if let Some((bracket, '[')) = open.last().copied()
+            && (is_header(start) || is_key(start))
+        {
+            return Some(bracket..bracket + 1);
         }
         if !open.is_empty() || !start.starts_with('[') {
             follow(line, at, &mut open);
@@ -26,7 +26,8 @@ pub(super) fn unclosed(text: &str) -> Option<Span> {
 fn is_header(line: &str) -> bool {
     let Some(rest) = line.strip_prefix('[') else { return false };
     let name = rest.strip_prefix('[').unwrap_or(rest);
-    let end = name.find(|c: char| !(c.is_ascii_alphanumeric() || matches!(c, '-' | '_' | '.'))).unwrap_or(name.len());
+    let end =
+        name.find(|c: char| !(c.is_ascii_alphanumeric() || matches!(c, '-' | '_' | '.'))).unwrap_or(name.len());
     let word = &name[..end];
     word.starts_with(|c: char| c.is_ascii_alphabetic())
         && !matches!(word, "true" | "false" | "nan" | "inf")

@@ -1,23 +1,30 @@
 //! What the reader has found so far. Whatever reads a part of a job adds to it and goes on.
 
 use super::fault::{Fault, Kind, Span};
+use super::registry::Name;
 use super::source::Source;
 
 /// Near names are looked for until there are this many findings: nobody reads on, and the search would cost too much.
 const NEAR_NAMES_UP_TO: usize = 200;
+/// Findings beyond this many are counted and not kept: a hostile file could fill the memory with them.
+const KEPT: usize = 20_000;
 
 pub(super) struct Findings<'s> {
     pub source: &'s Source,
     list: Vec<Fault>,
+    unlisted: usize,
 }
 
 impl<'s> Findings<'s> {
     pub fn new(source: &'s Source) -> Findings<'s> {
-        Findings { source, list: Vec::new() }
+        Findings { source, list: Vec::new(), unlisted: 0 }
     }
 
     pub fn add(&mut self, fault: Fault) {
-        self.list.push(fault);
+        match self.list.len() < KEPT {
+            true => self.list.push(fault),
+            false => self.unlisted += 1,
+        }
     }
 
     pub fn line(&self, span: &Span) -> usize {
@@ -49,9 +56,19 @@ impl<'s> Findings<'s> {
         self.list.len()
     }
 
-    /// In order of places; what is about the whole file comes first.
+    /// In order of places, what is about the whole file first. Those that were not kept are counted at the end.
     pub fn in_order(mut self) -> Vec<Fault> {
-        self.list.sort_by_key(|f| f.span.as_ref().map(|s| (s.start, s.end)));
+        in_order(&mut self.list);
+        if self.unlisted > 0 {
+            let last = self.list.last().and_then(|fault| fault.span.clone());
+            let fact = format!("{} faults and warnings more", self.unlisted);
+            self.list.push(Fault::new(Name::TooMany, last, fact, "mend those above first"));
+        }
         self.list
     }
+}
+
+/// Sorts by places; what has none comes first.
+pub(super) fn in_order(faults: &mut [Fault]) {
+    faults.sort_by_key(|fault| fault.span.as_ref().map(|span| (span.start, span.end)));
 }

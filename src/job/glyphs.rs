@@ -83,4 +83,25 @@ mod tests {
         assert_eq!(text, "Loft \u{fffd}\u{fffd}\u{fffd}x");
         assert_eq!(replaced, ['\n', '\u{1f3e0}', '\u{202e}']);
     }
+
+    /// The table is what the fonts have: read from the fonts themselves.
+    #[test]
+    fn the_table_is_that_of_the_fonts() {
+        let covered = COVERED.iter().flat_map(|(first, last)| *first..=*last);
+        let table: std::collections::BTreeSet<u32> = covered.collect();
+        for style in ["Regular", "Italic", "Medium", "SemiBold", "SemiBoldItalic"] {
+            let path = format!("{}/fonts/IBMPlexSans-{style}.ttf", env!("CARGO_MANIFEST_DIR"));
+            let bytes = std::fs::read(path).unwrap();
+            let face = ttf_parser::Face::parse(&bytes, 0).unwrap();
+            let mut in_font = std::collections::BTreeSet::new();
+            for subtable in face.tables().cmap.unwrap().subtables.into_iter().filter(|s| s.is_unicode()) {
+                subtable.codepoints(|code| {
+                    if subtable.glyph_index(code).is_some_and(|glyph| glyph.0 != 0) {
+                        in_font.insert(code);
+                    }
+                });
+            }
+            assert_eq!(table, in_font, "{style}");
+        }
+    }
 }

@@ -60,7 +60,7 @@ fn read(folder: &Path, path: &str) -> Result<Picture, Trouble> {
         Err(open::Plain::Missing) => {
             return Err((Name::LogoMissing, format!("the folder has no {path}"), "put it there, or mend its name"));
         }
-        Err(open::Plain::NotPlain(what)) => {
+        Err(open::Plain::Other(what)) => {
             return Err((Name::FileNotPlain, format!("{path} is {what}"), "put a plain file in its place"));
         }
         Err(open::Plain::TooLarge) => return Err(too_large(format!("{path} is larger than 8 MiB"))),

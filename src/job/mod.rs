@@ -91,6 +91,13 @@ impl Reading {
         Reading { source: Source::new(file, ""), findings: vec![fault], job: None }
     }
 
+    /// Takes in what only the calculation could find: the job is at fault after all.
+    pub fn refuse(&mut self, faults: &[sagledger_calc::fault::Fault]) {
+        let Some(job) = self.job.take() else { return };
+        self.findings.extend(faults.iter().map(|fault| job.explain_fault(fault)));
+        findings::in_order(&mut self.findings);
+    }
+
     pub fn faults(&self) -> usize {
         self.findings.iter().filter(|f| f.kind() == Kind::Fault).count()
     }

@@ -84,7 +84,7 @@ pub fn scan(text: &str) -> Result<Scanned<'_>, Trouble> {
         if looks_like_thousands(&unmarked, ',') {
             return Err(Trouble::ThousandsMark {
                 meant: number(plain(&unmarked)),
-                or: Some(meant),
+                or: Some(Box::new(meant)),
                 unit: unit_text(),
             });
         }

@@ -45,7 +45,7 @@ pub fn open(path: &Path) -> Result<Reading, Machine> {
             "there is no such file".into(),
             "give a job's folder or its job.toml; sagledger new DIR starts one",
         ),
-        Err(Plain::NotPlain(what)) => {
+        Err(Plain::Other(what)) => {
             refused(Name::FileNotPlain, format!("this is {what}"), "put a plain file in its place")
         }
         Err(Plain::TooLarge) => Ok(Reading::refused(&shown, too_large())),
@@ -77,7 +77,7 @@ pub(super) fn not_utf8(bytes: &[u8], valid: usize) -> Fault {
 pub(super) enum Plain {
     Missing,
     /// "a folder", "a link".
-    NotPlain(&'static str),
+    Other(&'static str),
     TooLarge,
     Machine(io::Error),
 }
@@ -91,10 +91,10 @@ pub(super) fn plain_file(folder: &Path, path: impl AsRef<Path>, largest: u64) ->
         let kind = fs::symlink_metadata(&full).map_err(of_io)?.file_type();
         let last = at + 1 == parts.len();
         match () {
-            () if kind.is_symlink() => return Err(Plain::NotPlain("a link")),
-            () if kind.is_dir() && last => return Err(Plain::NotPlain("a folder")),
+            () if kind.is_symlink() => return Err(Plain::Other("a link")),
+            () if kind.is_dir() && last => return Err(Plain::Other("a folder")),
             () if !kind.is_dir() && !last => return Err(Plain::Missing),
-            () if !kind.is_dir() && !kind.is_file() => return Err(Plain::NotPlain("a device, not a plain file")),
+            () if !kind.is_dir() && !kind.is_file() => return Err(Plain::Other("a device, not a plain file")),
             () => {}
         }
     }

@@ -80,9 +80,16 @@ pub enum Trouble {
     /// No number stands where one should; what stands there.
     NotANumber(String),
     /// A decimal comma; the number meant.
-    DecimalComma { meant: Number, unit: String },
+    DecimalComma {
+        meant: Number,
+        unit: String,
+    },
     /// A mark between thousands; the number meant, and what it would be if a decimal comma was.
-    ThousandsMark { meant: Number, or: Option<Number>, unit: String },
+    ThousandsMark {
+        meant: Number,
+        or: Option<Box<Number>>,
+        unit: String,
+    },
     UnitMissing(Number),
     /// Centimetres; the same in metres.
     Centimetre(Number),
@@ -181,7 +188,7 @@ mod tests {
             ("5. m", 5.0),
             ("102.5 mm", 0.1025),
             ("0.3 mm", 0.0003),
-            ("1234567890123456789 mm", 1234567890123456.789),
+            ("1234567890123456789 mm", 1_234_567_890_123_456.8),
         ];
         for (text, expected) in cases {
             assert_eq!(length(text), Ok(expected), "{text}");
@@ -202,7 +209,9 @@ mod tests {
 
     #[test]
     fn nothing_that_is_no_finite_number_passes() {
-        for text in ["nan m", "inf m", "-inf m", "NaN mm", "infinity m", "about 5 m", "m", "", " ", "- m", ". m", "1e m"] {
+        for text in
+            ["nan m", "inf m", "-inf m", "NaN mm", "infinity m", "about 5 m", "m", "", " ", "- m", ". m", "1e m"]
+        {
             assert!(matches!(length(text), Err(Trouble::NotANumber(_) | Trouble::UnitUnknown(..))), "{text}");
         }
         for text in ["1e400 m", "1e99999999999999999999 m", "-1e309 m"] {

@@ -5,10 +5,15 @@ use std::ops::Range;
 use toml::Spanned;
 use toml::de::{DeTable, Error};
 
-use super::fault::{Fault, Span};
 use super::brackets::unclosed;
+use super::fault::{Fault, Span};
 use super::findings::Findings;
 use super::registry::Name;
+
+/// More complaints than this are not worth telling one by one: the file is not a job.
+const MOST_COMPLAINTS: usize = 500;
+/// So many keys that stand twice are told with the place where they stood first.
+const MOST_LOOKED_UP: usize = 60;
 
 /// A tree, and the spans that a fault is already about.
 pub(super) struct Parsed<'t> {
@@ -45,7 +50,7 @@ pub(super) fn parse<'t>(text: &'t str, found: &mut Findings) -> Parsed<'t> {
         }
         last_line = line;
         spoiled.push(span);
-        if structural {
+        if structural || spoiled.len() >= MOST_COMPLAINTS {
             whole = false;
             break;
         }
@@ -125,9 +130,7 @@ fn fault(error: &Error, span: Span, text: &str, found: &Findings) -> Fault {
                 }
             }
         }
-        "string values must be quoted" => {
-            syntax("a text without quotes", "put it in double quotes".into())
-        }
+        "string values must be quoted" => syntax("a text without quotes", "put it in double quotes".into()),
         "invalid basic string" | "invalid literal string" if expected == "`\"`" || expected == "`'`" => {
             syntax("a text that does not end on its line", "close it with a double quote".into())
         }
@@ -156,7 +159,11 @@ fn twice(span: Span, part: &str, found: &Findings) -> Fault {
         true => format!("{key} stands twice"),
         false => "a key stands twice".into(),
     };
-    match first_of(span.start, part, found.source.text()) {
+    let first = match found.count() < MOST_LOOKED_UP {
+        true => first_of(span.start, part, found.source.text()),
+        false => None,
+    };
+    match first {
         Some(first) => {
             let line = found.line(&first);
             Fault::new(

@@ -155,7 +155,9 @@ impl<'t> Item<'t> {
             DeValue::Table(table) => Some(Table::of(keys, table, self.span.clone(), found)),
             _ => {
                 let (example, _) = keys.now.first().copied().unwrap_or(("key", ""));
+                let doubled = found.source.slice(&self.span).starts_with("[[");
                 let remedy = match keys.title {
+                    _ if doubled => format!("write [{}] in single brackets", self.key),
                     title if title.starts_with('[') => format!("begin it with a line {title}"),
                     _ => format!("write it in braces: {{ {} }}", keys.example(example)),
                 };

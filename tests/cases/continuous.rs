@@ -38,7 +38,7 @@ fn two_spans_permanent() -> Case {
 
 /// Imposed load where it worsens: one span for the greatest span moment and deflection, both for the middle bearing.
 fn two_spans_pattern() -> Case {
-    let (section, span, g, q) = ("254x146x31 UB", 4.0_f64, 3.0, 7.0);
+    let (section, span, g, q) = ("254x146x31 UB", 4.0_f64, 1.2, 9.0);
     let (stiffness, weight) = stiffness_and_weight(section);
     let rows = [line("permanent", g - weight), line("imposed", q)];
     // One span loaded: 0.4375, 0.625, -0.0625 wL; bending at the middle wL2/16.
@@ -61,10 +61,10 @@ fn two_spans_pattern() -> Case {
     .is("beams.0.bearings.2.reaction_kN.characteristic_max", (0.375 * g + 0.4375 * q) * span, EXACT)
     // Own weight and the rest of the permanent load push down at the end bearing whichever span they are on, but for
     // the far span: each is a contribution of its own in set A.
-    .is(
+    .within(
         "beams.0.bearings.0.reaction_kN.uplift_max",
         (1.5 * 0.0625 * q - 0.9 * 0.4375 * g + 1.1 * 0.0625 * g).max(0.0) * span,
-        EXACT,
+        1e-9,
     )
     .is("beams.0.moment_kNm.min", -design * span * span / 8.0, EXACT)
     .is("beams.0.moment_kNm.max", first * first / (2.0 * design), EXACT)

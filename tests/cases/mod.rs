@@ -68,13 +68,13 @@ pub fn cases() -> Vec<Case> {
 /// What a results file gets wrong of a case.
 pub fn misses(case: &Case, results: &Value) -> Vec<String> {
     let miss = |expected: &Expected| {
-        let figure = expected.path.split('.').fold(Some(results), |value, key| {
-            value.and_then(|value| match key.parse::<usize>() {
-                Ok(index) => value.get(index),
-                Err(_) => value.get(key),
-            })
+        let figure = expected.path.split('.').try_fold(results, |value, key| match key.parse::<usize>() {
+            Ok(index) => value.get(index),
+            Err(_) => value.get(key),
         });
-        match figure.and_then(Value::as_f64) {
+        // A tilt may carry the sign of the side that goes down; its size is what is known here.
+        let tilt = expected.path.ends_with("tilt");
+        match figure.and_then(Value::as_f64).map(|figure| if tilt { figure.abs() } else { figure }) {
             Some(figure) if (figure - expected.value).abs() <= expected.slack => None,
             found => Some(format!(
                 "{}: {} is {found:?}, not {} within {:e} ({})",

@@ -58,25 +58,25 @@ fn uniform() -> Case {
     .is("takedown.to_supports_kN.imposed A", q * span, EXACT)
 }
 
-/// Greatest deflection P b (L2 - b2)^1.5 / (9 sqrt 3 L EI) at sqrt((L2 - b2) / 3), a > b.
+/// Greatest deflection P a (L2 - a2)^1.5 / (9 sqrt 3 L EI), a < b.
 fn off_centre_point() -> Case {
-    let (section, span, force, a) = ("254x102x28 UB", 5.1_f64, 21.0, 3.3);
+    let (section, span, force, a) = ("254x102x28 UB", 5.1_f64, 21.0, 1.8);
     let (stiffness, weight) = stiffness_and_weight(section);
     let b = span - a;
-    let deflection = force * b * (span * span - b * b).powf(1.5) / (9.0 * 3f64.sqrt() * span * stiffness) * 1e3;
+    let deflection = force * a * (span * span - a * a).powf(1.5) / (9.0 * 3f64.sqrt() * span * stiffness) * 1e3;
     // The load is heavy enough for the shear to change its sign under it.
     let design = 1.5 * force * a * b / span + 1.35 * weight * a * b / 2.0;
     Case::new(
         "point load off the centre",
-        "Pab/L and P b (L2 - b2)^1.5 / (9 sqrt 3 L EI), handbooks",
+        "Pab/L and P a (L2 - a2)^1.5 / (9 sqrt 3 L EI), handbooks",
         job("", &beam("S", section, span, &[wall("a", 0.0), wall("b", span)], &[&point("imposed", force, a)])),
     )
     .is("beams.0.bearings.0.reaction_kN.imposed A", force * b / span, EXACT)
     .is("beams.0.bearings.1.reaction_kN.imposed A", force * a / span, EXACT)
     .is("beams.0.moment_kNm.max", design, EXACT)
     .within("beams.0.moment_kNm.at_m", a, 1e-6)
-    .is("beams.0.shear_kN.max", 1.5 * force * a / span + 1.35 * weight * span / 2.0, EXACT)
-    .within("beams.0.shear_kN.at_m", span, 0.02 * span)
+    .is("beams.0.shear_kN.max", 1.5 * force * b / span + 1.35 * weight * span / 2.0, EXACT)
+    .within("beams.0.shear_kN.at_m", 0.0, 1e-6)
     .is("beams.0.deflection_mm.own_variable", deflection, EXACT)
 }
 

@@ -42,6 +42,8 @@ pub struct Traits {
     pub shear_flexible: bool,
     pub two_expressions: bool,
     pub recommended: bool,
+    /// The roof's build-up has wind.
+    pub wind_on_roof: bool,
 }
 
 struct Seat {
@@ -152,7 +154,7 @@ fn write_job(rng: &mut Rng, frames: &[Frame], traits: &mut Traits) -> String {
     if chance(rng, 60) {
         let _ = writeln!(text, "[limits]\n{}", limits(rng));
     }
-    text.push_str(&build_ups(rng));
+    text.push_str(&build_ups(rng, traits));
     for wall in WALLS {
         let _ = writeln!(text, "[[wall]]\nname = \"{wall}\"\n");
     }

@@ -9,7 +9,7 @@ const FLOORS: [&str; 2] = ["timber floor", "store floor"];
 const WALLS: [&str; 2] = ["brick skin", "stud wall"];
 
 /// The build-ups of a job: a roof with imposed load, snow and wind, two floors, two walls.
-pub fn build_ups(rng: &mut Rng) -> String {
+pub fn build_ups(rng: &mut Rng, traits: &mut Traits) -> String {
     let mut text = String::new();
     let area = |from: f64, to: f64, rng: &mut Rng| {
         let size = on_grid(rng, from, to, 0.01);
@@ -20,7 +20,8 @@ pub fn build_ups(rng: &mut Rng) -> String {
     let _ = writeln!(text, "  {{ what = \"plasterboard\", thickness = \"15 mm\", density = \"9.0 kN/m3\" }},\n]");
     let _ = writeln!(text, "imposed = {{ category = \"H\", load = \"{}\" }}", area(0.2, 0.8, rng));
     let _ = writeln!(text, "snow = \"{}\"", area(0.2, 0.9, rng));
-    if chance(rng, 40) {
+    traits.wind_on_roof = chance(rng, 40);
+    if traits.wind_on_roof {
         let size = on_grid(rng, 0.1, 1.2, 0.01);
         let sign = if chance(rng, 60) { "-" } else { "" };
         let _ = writeln!(text, "wind = \"{sign}{} kN/m2\"", size);
@@ -110,7 +111,7 @@ fn area_row(rng: &mut Rng, along: f64, traits: &mut Traits) -> Vec<String> {
     let name = if roof { "roof" } else { pick(rng, &FLOORS) };
     let mut lines = vec![format!("build-up = \"{name}\""), breadth(rng, "width", 0.3, 4.0, traits)];
     lines.extend(extent(rng, along));
-    if roof {
+    if roof && traits.wind_on_roof {
         lines.extend(wind_case(rng));
     }
     lines

@@ -170,7 +170,11 @@ pub fn cut(text: &str, places: impl Fn(&Table) -> Vec<f64>) -> String {
                 if let Some(Value::Array(pair)) = piece.get_mut(key) {
                     let sizes: Vec<f64> =
                         pair.iter().map(|size| quantity(size.as_str().expect("a size"))).collect();
-                    let there = |x: f64| sizes[0] + (sizes[1] - sizes[0]) * (x - from) / (to - from);
+                    let there = |x: f64| match x {
+                        _ if x == from => sizes[0],
+                        _ if x == to => sizes[1],
+                        _ => sizes[0] + (sizes[1] - sizes[0]) * (x - from) / (to - from),
+                    };
                     *pair = ends.iter().map(|x| Value::String(format!("{} m", there(*x)))).collect();
                 }
             }

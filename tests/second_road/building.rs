@@ -5,6 +5,7 @@ use super::element::Side;
 use super::job::{Action, Job, Load, Support};
 use super::search::{Sample, Stretch};
 use super::solve::{Answer, Contribution, Frame, contributions};
+use std::cell::OnceCell;
 
 /// Movement of a bearing under each contribution, and from settlement, m.
 pub struct BearingMovement {
@@ -21,20 +22,24 @@ pub struct Building {
     /// Movement of each bearing of each beam.
     pub bearings: Vec<Vec<BearingMovement>>,
     pub(super) frame: Frame,
-    /// Samples along each beam, in order; made once, searched for every effect.
-    pub(super) stretches: Vec<Vec<Stretch>>,
+    /// Samples along each beam, in order; made when first wanted, searched for every effect.
+    pub(super) stretches: Vec<OnceCell<Vec<Stretch>>>,
 }
 
 impl Building {
     pub fn new(text: &str) -> Building {
-        let job = Job::read(text);
+        Building::of(Job::read(text))
+    }
+
+    pub fn of(job: Job) -> Building {
         let contributions = contributions(&job);
         let combinations = Combinations::new(&job, &contributions);
         let frame = Frame::new(&job);
         let under = |contribution: &Contribution| frame.under(&job, contribution.beam, contribution.load);
         let answers = contributions.iter().map(under).collect();
         let settled = frame.settled(&job);
-        let (bearings, stretches) = (Vec::new(), Vec::new());
+        let stretches = job.beams.iter().map(|_| OnceCell::new()).collect();
+        let bearings = Vec::new();
         let mut building =
             Building { job, contributions, combinations, answers, settled, bearings, frame, stretches };
         let of_beam = |beam: usize| {
@@ -42,7 +47,6 @@ impl Building {
             (0..count).map(|bearing| building.movements_of_bearing(beam, bearing)).collect()
         };
         building.bearings = (0..building.job.beams.len()).map(of_beam).collect();
-        building.stretches = (0..building.job.beams.len()).map(|beam| building.sampled(beam)).collect();
         building
     }
 

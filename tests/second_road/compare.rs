@@ -8,9 +8,9 @@ use super::search::Sample;
 use serde_json::Value;
 
 /// Tolerance, as a part of the scale of an effect: the sum of the sizes of all that adds to it. The file's twelve
-/// figures, the two solvers' rounding and the search for peaks each stay below 1e-9; a factor, a rule or a place read
-/// differently moves a figure by 1e-4 at least.
-const TOLERANCE: f64 = 1e-7;
+/// figures, the two solvers' rounding and the search for peaks each stay below it; a factor, a rule or a place read
+/// differently moves a figure by a hundred thousand times as much.
+pub const TOLERANCE: f64 = 1e-9;
 
 /// Every figure that the two roads do not agree on, in words.
 pub fn differences(building: &Building, program: &Value) -> Vec<String> {
@@ -148,7 +148,7 @@ fn compare_movements(
     report.same("hand_rule", &found["deflection_mm"]["hand_rule"], hand_rule, hand_rule);
     let distance = building.job.beams[beam].bearings.windows(2).map(|pair| pair[1].at - pair[0].at);
     let least_distance = distance.fold(f64::INFINITY, f64::min);
-    report.same("tilt", &found["tilt"], building.worst_tilt(beam), scale / least_distance);
+    report.same("tilt", &size(&found["tilt"]), building.worst_tilt(beam), scale / least_distance);
     let figure = |key: &str| found["deflection_mm"][key].as_f64().unwrap_or(f64::NAN);
     let stacked = (figure("stacked_total") / 1e3, figure("stacked_at_m"));
     let at_place = building.at_place(beam, stacked.1, |sample| {
@@ -194,9 +194,13 @@ fn compare_check(report: &mut Report, building: &Building, beam: usize, check: &
         }
         "total deflection" | "after deflection" | "variable deflection" | "stacked deflection" => {
             let kind = name.split(' ').next().unwrap_or("");
-            let (movement, limit) = movement_and_limit(building, beam, kind, range);
-            report.same("demand", &demand, movement * 1e3, scales.movement * 1e3);
-            report.same("capacity", &check["capacity"], limit * 1e3, limit * 1e3);
+            match governing(building, beam, kind, range) {
+                Some(Governing { movement, limit, .. }) => {
+                    report.same("demand", &demand, movement * 1e3, scales.movement * 1e3);
+                    report.same("capacity", &check["capacity"], limit * 1e3, limit * 1e3);
+                }
+                None => report.lines.push(format!("{}: no limit is in force", report.beam)),
+            }
         }
         "tilt" => {
             let bearings = &building.job.beams[beam].bearings;
@@ -233,10 +237,21 @@ fn compare_check(report: &mut Report, building: &Building, beam: usize, check: &
     }
 }
 
-/// The movement that a kind of limit looks at within a range, and its limit, both where their ratio is greatest.
-fn movement_and_limit(building: &Building, beam: usize, kind: &str, range: [f64; 2]) -> (f64, f64) {
-    let mut worst = (0.0, f64::INFINITY);
-    let mut worst_share = f64::NEG_INFINITY;
+/// The movement that is closest to its limit.
+#[derive(Clone, Copy, Debug)]
+pub struct Governing {
+    /// Its size, m; never negative.
+    pub movement: f64,
+    pub limit: f64,
+    pub at: f64,
+    /// 1 downward, -1 upward.
+    pub sign: f64,
+}
+
+/// The movement that a kind of limit looks at within a range, where its share of the limit is greatest; nothing where
+/// there is no limit.
+pub fn governing(building: &Building, beam: usize, kind: &str, range: [f64; 2]) -> Option<Governing> {
+    let mut worst: Option<Governing> = None;
     for (from, to, limit, downward_only) in building.limited(beam, kind) {
         if from < range[0] - 1e-9 || to > range[1] + 1e-9 {
             continue;
@@ -247,13 +262,15 @@ fn movement_and_limit(building: &Building, beam: usize, kind: &str, range: [f64;
             "variable" => building.own(Rule::Variable, sample),
             _ => building.stacked(sample),
         };
-        let movement = building.peak(beam, from, to, |sample| {
-            let [most, least] = both(sample);
-            if downward_only { most } else { most.max(-least) }
-        });
-        let size = movement.0.max(0.0);
-        if size / limit > worst_share {
-            (worst, worst_share) = ((size, limit), size / limit);
+        let down = building.peak(beam, from, to, |sample| both(sample)[0]);
+        let up = match downward_only {
+            true => (0.0, from),
+            false => building.peak(beam, from, to, |sample| -both(sample)[1]),
+        };
+        let (sign, size, at) = if down.0 >= up.0 { (1.0, down.0, down.1) } else { (-1.0, up.0, up.1) };
+        let movement = size.max(0.0);
+        if worst.is_none_or(|worst| movement / limit > worst.movement / worst.limit) {
+            worst = Some(Governing { movement, limit, at, sign });
         }
     }
     worst

@@ -15,6 +15,7 @@ pub mod element;
 pub mod job;
 pub mod limits;
 pub mod profile_matrix;
+pub mod required;
 pub mod results;
 pub mod search;
 pub mod sections;

@@ -36,8 +36,9 @@ pub struct Stretch {
 }
 
 impl Building {
-    pub(super) fn sampled(&self, beam: usize) -> Vec<Stretch> {
-        self.breaks(beam).windows(2).map(|ends| self.stretch(beam, [ends[0], ends[1]])).collect()
+    fn sampled(&self, beam: usize) -> &[Stretch] {
+        let sample = || self.breaks(beam).windows(2).map(|ends| self.stretch(beam, [ends[0], ends[1]])).collect();
+        self.stretches[beam].get_or_init(sample)
     }
 
     fn stretch(&self, beam: usize, ends: [f64; 2]) -> Stretch {
@@ -53,23 +54,21 @@ impl Building {
 
     /// The greatest value of an effect between two places of a beam, and where.
     pub fn peak(&self, beam: usize, from: f64, to: f64, effect: impl Fn(&Sample) -> f64) -> (f64, f64) {
-        let cut: Vec<Stretch>;
-        let mut stretches: Vec<&Stretch> = Vec::new();
+        let mut whole: Vec<&Stretch> = Vec::new();
         let mut ends = Vec::new();
-        for stretch in &self.stretches[beam] {
+        for stretch in self.sampled(beam) {
             let (left, right) = (stretch.samples[0].x, stretch.samples[GRID].x);
             if left >= from - 1e-9 && right <= to + 1e-9 {
-                stretches.push(stretch);
+                whole.push(stretch);
             } else if right.min(to) - left.max(from) > 1e-9 {
                 ends.push([left.max(from), right.min(to)]);
             }
         }
-        cut = ends.into_iter().map(|ends| self.stretch(beam, ends)).collect();
-        stretches.extend(&cut);
+        let cut: Vec<Stretch> = ends.into_iter().map(|ends| self.stretch(beam, ends)).collect();
         let mut grids: Vec<(&Stretch, Vec<f64>)> = Vec::new();
         let mut best = (f64::NEG_INFINITY, from);
         let mut scale = 0.0_f64;
-        for stretch in stretches {
+        for stretch in whole.into_iter().chain(&cut) {
             let values: Vec<f64> = stretch.samples.iter().map(&effect).collect();
             for (value, sample) in values.iter().zip(&stretch.samples) {
                 scale = scale.max(value.abs());
@@ -162,6 +161,6 @@ impl Building {
 
     /// The greatest value on the grid alone: enough for a scale.
     pub fn greatest_on_grid(&self, beam: usize, effect: impl Fn(&Sample) -> f64) -> f64 {
-        self.stretches[beam].iter().flat_map(|s| &s.samples).map(effect).fold(0.0, f64::max)
+        self.sampled(beam).iter().flat_map(|s| &s.samples).map(effect).fold(0.0, f64::max)
     }
 }

@@ -32,13 +32,26 @@ pub fn account(building: &Building, results: &Results, beam: usize) -> Account {
     Account::of(&tape)
 }
 
-/// The checks whose workings are shown, in the order of their names.
+/// The checks whose workings are shown, in the order of their names; webs place by place.
 pub fn shown(own: &BeamResult) -> Vec<&Check> {
     let mut shown = Vec::new();
     for kind in CheckKind::ALL {
         let of_kind = own.checks.iter().filter(|c| c.kind == kind && !c.advice);
         match kind {
-            CheckKind::WebUnderForce | CheckKind::WebWithBending | CheckKind::Torsion => shown.extend(of_kind),
+            // A web's force alone, then with the moment at the same place, which goes on from it.
+            CheckKind::WebUnderForce => {
+                for alone in of_kind {
+                    let with_moment = |c: &&Check| c.kind == CheckKind::WebWithBending && c.place == alone.place;
+                    shown.push(alone);
+                    shown.extend(own.checks.iter().filter(with_moment));
+                }
+            }
+            CheckKind::WebWithBending => {
+                let alone =
+                    |place| own.checks.iter().any(|c| c.kind == CheckKind::WebUnderForce && c.place == place);
+                shown.extend(of_kind.filter(|c| !alone(c.place)));
+            }
+            CheckKind::Torsion => shown.extend(of_kind),
             CheckKind::Bending
             | CheckKind::Shear
             | CheckKind::BendingWithShear
@@ -80,7 +93,7 @@ fn reactions(building: &Building, own: &BeamResult, combinations: &Combinations,
         let sub = (place + 1).to_string();
         let at = carrier(building, bearing.on);
         let plural = format!("reactions at {at}, bearing {sub},");
-        let design = Writing { whole: &glossary::R_Ed, part: &glossary::R, plural: &plural, sub: Some(&sub) };
+        let design = Writing { sub: Some(&sub), ..Writing::new(&glossary::R_Ed, &glossary::R, &plural) };
         if let Some(combined) = Combined::of(&bearing.design_max, combinations) {
             signed(w, &combined, 1.0, &design);
         }

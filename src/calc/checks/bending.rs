@@ -25,7 +25,8 @@ pub struct Bending {
     pub moment: Combined<1, 1>,
 }
 
-pub(super) const MOMENT: Writing<'_, 1, 1> = Writing::new(&glossary::M_Ed, &glossary::M, "moments");
+pub(super) const MOMENT: Writing<'_, 1, 1> = Writing::new(&glossary::M_Ed, &glossary::M, "moments")
+    .turned("The beam hogs here; its moment is given as a size");
 
 pub(super) fn check<N: Number, W: Workings<N>>(w: &mut W, inputs: &Bending) -> Outcome {
     let M_Ed = size(w, &inputs.moment, &MOMENT);

@@ -38,7 +38,20 @@ impl<const FORCE: i8, const LENGTH: i8> Combined<FORCE, LENGTH> {
 
     /// The combined value, with its sign, SI.
     pub fn value(&self) -> f64 {
-        self.parts.iter().fold(0.0, |sum, p| sum + p.partial * p.reduction * p.value.si())
+        self.without_noise().parts.iter().fold(0.0, |sum, p| sum + p.partial * p.reduction * p.value.si())
+    }
+
+    /// Without parts that are nothing but the rounding of the solution: below a millionth of a newton (metre) or a
+    /// millionth of a micrometre, or 12 orders below the greatest part.
+    fn without_noise(&self) -> Cow<'_, Self> {
+        let floor = if FORCE == 0 { 1e-12 } else { 1e-6 };
+        let greatest = self.parts.iter().map(|p| p.value.si().abs()).fold(0.0, f64::max);
+        let acts = |p: &Part<FORCE, LENGTH>| p.value.si().abs() > f64::max(floor, 1e-12 * greatest);
+        if self.parts.iter().all(acts) {
+            return Cow::Borrowed(self);
+        }
+        let parts = self.parts.iter().copied().filter(acts).collect();
+        Cow::Owned(Combined { parts, ..self.clone() })
     }
 
     /// "EN 1990 6.4.3.2, (6.10)".
@@ -63,13 +76,19 @@ pub(super) struct Writing<'a, const FORCE: i8, const LENGTH: i8> {
     pub part: &'static Entry<FORCE, LENGTH>,
     /// "moments": what is combined.
     pub plural: &'a str,
+    /// What it means that the signs are turned; empty where a size says it all.
+    pub turned: &'static str,
     /// A subscript of its own for the whole.
     pub sub: Option<&'a str>,
 }
 
 impl<'a, const F: i8, const L: i8> Writing<'a, F, L> {
     pub const fn new(whole: &'static Entry<F, L>, part: &'static Entry<F, L>, plural: &'a str) -> Self {
-        Writing { whole, part, plural, sub: None }
+        Writing { whole, part, plural, turned: "", sub: None }
+    }
+
+    pub const fn turned(self, turned: &'static str) -> Self {
+        Writing { turned, ..self }
     }
 
     fn symbol(&self) -> Symbol<'a, F, L> {
@@ -88,8 +107,11 @@ impl<'a, const F: i8, const L: i8> Writing<'a, F, L> {
     }
 }
 
-/// Terms in one line of the sum: more would not fit its column.
-const TERMS_A_LINE: usize = 3;
+/// Room of one line of the sum, where a value takes 4 and a factor before it 2: more would not fit its column.
+const ROOM: usize = 20;
+const OF_VALUE: usize = 4;
+const OF_FACTOR: usize = 2;
+const OF_BRACKETS: usize = 2;
 
 /// The size of a combined effect, whichever way it acts.
 pub(super) fn size<N: Number, W: Workings<N>, const F: i8, const L: i8>(
@@ -108,28 +130,48 @@ pub(super) fn signed<N: Number, W: Workings<N>, const F: i8, const L: i8>(
     sign: f64,
     writing: &Writing<'_, F, L>,
 ) -> Q<N, F, L> {
+    let combined = &*combined.without_noise();
     let clause = combined.clause();
     if combined.parts.is_empty() {
         let nought = Q::from_si(0.0);
-        return w.looked_up(clause, writing.symbol(), nought, "no action contributes");
+        return w.looked_up(clause, writing.symbol(), nought, "no action contributes at this place");
     }
-    w.say(|| sentence(combined, sign, writing.plural));
+    w.say(|| sentence(combined, sign, writing));
     let mut sum: Option<Q<N, F, L>> = None;
+    let (mut taken, mut lines) = (0, 0);
     for (place, part) in combined.parts.iter().enumerate() {
         let value = Q::from_si(sign * part.value.si());
         let value = w.given(writing.part.of(action_name(combined, place)), value);
         let term = factored(w, combined, part, value);
+        let own = room_of(combined, part) + if value.plain().si() < 0.0 { OF_BRACKETS } else { 0 };
         sum = Some(match sum {
             None => term,
-            Some(sum) if place % TERMS_A_LINE == 0 => {
-                w.line(clause, writing.so_far(place / TERMS_A_LINE), sum) + term
+            Some(sum) if taken + own > ROOM => {
+                lines += 1;
+                taken = OF_VALUE;
+                w.line(clause, writing.so_far(lines), sum) + term
             }
             Some(sum) => sum + term,
         });
+        taken += own;
     }
     match sum {
         Some(sum) => w.line(clause, writing.symbol(), sum),
         None => w.given(writing.symbol(), Q::from_si(0.0)),
+    }
+}
+
+/// The room that its term takes.
+fn room_of<const F: i8, const L: i8>(combined: &Combined<F, L>, part: &Part<F, L>) -> usize {
+    let factors = usize::from(has_partial(combined)) + usize::from(part.reduction != 1.0);
+    OF_VALUE + OF_FACTOR * factors
+}
+
+/// Factors of serviceability are all 1 and not written.
+fn has_partial<const F: i8, const L: i8>(combined: &Combined<F, L>) -> bool {
+    match combined.purpose {
+        Purpose::Strength | Purpose::Equilibrium => true,
+        Purpose::Characteristic | Purpose::Frequent | Purpose::QuasiPermanent => false,
     }
 }
 
@@ -150,21 +192,19 @@ fn factored<N: Number, W: Workings<N>, const F: i8, const L: i8>(
             false => w.given(&glossary::psi_0, reduction),
         }
     });
-    let partial: Option<Ratio<N>> = match combined.purpose {
-        Purpose::Strength | Purpose::Equilibrium => {
-            let partial = Q::from_si(part.partial);
-            Some(match (permanent, part.partial <= 1.0, several) {
-                (true, true, _) => w.given(&glossary::gamma_G_inf, partial),
-                (true, false, true) => w.given(&glossary::gamma_G_sup, partial),
-                (true, false, false) => w.given(&glossary::gamma_G, partial),
-                (false, ..) => w.given(&glossary::gamma_Q, partial),
-            })
+    let partial: Option<Ratio<N>> = has_partial(combined).then(|| {
+        let partial = Q::from_si(part.partial);
+        match (permanent, part.partial <= 1.0, several) {
+            (true, true, _) => w.given(&glossary::gamma_G_inf, partial),
+            (true, false, true) => w.given(&glossary::gamma_G_sup, partial),
+            (true, false, false) => w.given(&glossary::gamma_G, partial),
+            (false, ..) => w.given(&glossary::gamma_Q, partial),
         }
-        Purpose::Characteristic | Purpose::Frequent | Purpose::QuasiPermanent => None,
-    };
+    });
     // As f64 both ways of leaving a factor out are a multiplication by 1.
     match (partial, reduction) {
-        (Some(partial), Some(reduction)) => value.scaled_by(partial * reduction),
+        (Some(partial), Some(xi)) if permanent => value.scaled_by(xi * partial),
+        (Some(partial), Some(psi)) => value.scaled_by(partial * psi),
         (Some(factor), None) | (None, Some(factor)) => value.scaled_by(factor),
         (None, None) => value,
     }
@@ -219,7 +259,8 @@ fn spoken(action: Action) -> String {
     }
 }
 
-fn sentence<const F: i8, const L: i8>(combined: &Combined<F, L>, sign: f64, plural: &str) -> String {
+fn sentence<const F: i8, const L: i8>(combined: &Combined<F, L>, sign: f64, writing: &Writing<'_, F, L>) -> String {
+    let Writing { plural, turned, .. } = writing;
     let names = |leads: bool| {
         let chosen = combined.parts.iter().filter(|p| p.action != Action::Permanent && p.leads == leads);
         let mut names: Vec<String> = chosen.map(|p| spoken(p.action)).collect();
@@ -227,10 +268,10 @@ fn sentence<const F: i8, const L: i8>(combined: &Combined<F, L>, sign: f64, plur
         names
     };
     let (led, with) = (names(true), names(false));
-    let mut words = match sign < 0.0 {
-        true => format!("The {plural} of each action are combined, their signs turned."),
-        false => format!("The {plural} of each action are combined."),
-    };
+    let mut words = format!("The {plural} of each action are combined.");
+    if sign < 0.0 && !turned.is_empty() {
+        words.push_str(&format!(" {turned}."));
+    }
     let verb =
         |names: &[String], one: &str, more: &str| if names.len() == 1 { one.to_string() } else { more.to_string() };
     let capital = |text: String| {
@@ -238,7 +279,7 @@ fn sentence<const F: i8, const L: i8>(combined: &Combined<F, L>, sign: f64, plur
         letters.next().map(|c| c.to_uppercase().collect::<String>() + letters.as_str()).unwrap_or_default()
     };
     match (led.is_empty(), with.is_empty()) {
-        (true, true) => words.push_str(" Permanent actions alone make it greatest."),
+        (true, true) => words.push_str(" Permanent actions alone count."),
         (false, true) => {
             words.push_str(&format!(" {} {}.", capital(listed(&led)), verb(&led, "leads", "lead together")));
         }
@@ -263,4 +304,38 @@ fn sentence<const F: i8, const L: i8>(combined: &Combined<F, L>, sign: f64, plur
         words.push_str(" Permanent actions that relieve keep the smaller factor.");
     }
     words
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+    use crate::checks::bending::MOMENT;
+    use crate::checks::example::two;
+    use crate::workings::Silent;
+
+    #[test]
+    fn what_the_solution_rounds_is_no_part() {
+        let mut moment: Combined<1, 1> = two(20e3, 8e3);
+        moment.parts[1].value = Q::from_si(3e-12);
+        // 1.35 × 20 kNm, the imposed part being rounding.
+        assert_eq!(size(&mut Silent, &moment, &MOMENT).si(), 27e3);
+        moment.parts[0].value = Q::from_si(-2e-11);
+        assert_eq!(size(&mut Silent, &moment, &MOMENT).si(), 0.0);
+        assert_eq!(moment.value(), 0.0);
+    }
+
+    #[test]
+    fn worked_example() {
+        // By hand: see the head of this file.
+        let mut moment: Combined<1, 1> = two(20e3, 8e3);
+        moment.parts.push(Part {
+            action: Action::Imposed(Category::H),
+            value: Q::from_si(4e3),
+            partial: 1.5,
+            reduction: 0.7,
+            leads: false,
+        });
+        let found = size(&mut Silent, &moment, &MOMENT).si();
+        assert!((found - 43.2e3).abs() < 1e-9 * 43.2e3, "{found}");
+    }
 }

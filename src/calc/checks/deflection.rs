@@ -9,14 +9,13 @@
 //! with I_y = 4000 cm⁴ in hand, I_req = 4000 × 12 / 16 = 3000 cm⁴.
 
 use super::Inputs;
-use super::combined::{Writing, size};
+use super::combined::{Writing, signed, size};
 use super::example::characteristic;
 use super::{Combined, Outcome, Required, judge, limit};
 use crate::limits::{Bound, LimitFrom, LimitSet};
 use crate::limits::{Limit, Movement};
 use crate::quantity::{Length, SecondMoment};
-use crate::results::StretchKind;
-use crate::results::{CheckUnit, Stretch};
+use crate::results::{CheckUnit, Stretch, StretchKind, Verdict};
 use crate::workings::lines::step;
 use crate::workings::{Number, Workings, glossary};
 
@@ -48,7 +47,14 @@ pub(super) fn check<N: Number, W: Workings<N>>(w: &mut W, inputs: &Deflection) -
         Movement::Stacked => &glossary::w_st,
         Movement::Tilt => &glossary::dw,
     };
-    let movement = size(w, &inputs.movement, &Writing::new(whole, &glossary::w, "own movements"));
+    let writing = Writing::new(whole, &glossary::w, "own movements")
+        .turned("The beam goes up here; its movement is given as a size");
+    if inputs.stretch.kind != StretchKind::Span && inputs.movement.value() < 0.0 {
+        signed(w, &inputs.movement, 1.0, &writing);
+        let w_lim = limit::length(w, &inputs.limit, &inputs.stretch);
+        return upward(w, limit::bounds(&inputs.limit), w_lim);
+    }
+    let movement = size(w, &inputs.movement, &writing);
     let w_lim = limit::length(w, &inputs.limit, &inputs.stretch);
     let outcome = judge(w, "", movement, w_lim, CheckUnit::Length);
     let required = required(w, &inputs.second_moment, |w, I_y| {
@@ -57,6 +63,25 @@ pub(super) fn check<N: Number, W: Workings<N>>(w: &mut W, inputs: &Deflection) -
         Required::Of(I_req.plain())
     });
     Outcome { required, clause: limit::bounds(&inputs.limit), ..outcome }
+}
+
+/// An overhang that goes up: limits look at downward movement there, so that nothing of this one is used.
+pub(super) fn upward<N: Number, W: Workings<N>>(w: &mut W, clause: String, limit: Length<N>) -> Outcome {
+    w.note(
+        "common practice",
+        "the overhang goes up, and limits look at its downward movement: nothing of it is used",
+    );
+    Outcome {
+        demand: Some(0.0),
+        capacity: Some(limit.plain().si()),
+        unit: CheckUnit::Length,
+        utilisation: Some(0.0),
+        verdict: Verdict::Met,
+        reason: None,
+        clause,
+        note: None,
+        required: None,
+    }
 }
 
 /// What the limit asks of the second moment of area; nothing where the limit is no length at all.
@@ -80,11 +105,6 @@ pub(super) fn required<N: Number, W: Workings<N>>(
             Some(Required::BudgetUsed)
         }
     }
-}
-
-/// The greater of two limits, for an overhang beside a span.
-pub(super) fn larger<N: Number>(one: Length<N>, other: Length<N>) -> Length<N> {
-    crate::quantity::max(one, other)
 }
 
 /// The worked example above.
@@ -117,5 +137,22 @@ mod tests {
         assert_eq!(outcome.clause, "span/250");
         let Some(Required::Of(required)) = outcome.required else { panic!("{outcome:?}") };
         near(Some(required.si()), 3000e-8, 1e-12);
+    }
+
+    #[test]
+    fn an_overhang_that_goes_up_uses_nothing_of_its_limit() {
+        // engineering practice: limits of overhangs look at downward movement.
+        let Inputs::Deflection(mut inputs) = example() else { unreachable!() };
+        inputs.stretch.kind = StretchKind::Overhang;
+        let down = run(&Inputs::Deflection(inputs.clone()));
+        // Twice an overhang of 4 m: 8000 / 250 = 32 mm.
+        near(down.capacity, 32e-3, 1e-12);
+        near(down.demand, 12e-3, 1e-12);
+        inputs.movement = characteristic(-5e-3, -7e-3);
+        let up = run(&Inputs::Deflection(inputs.clone()));
+        assert_eq!((up.demand, up.utilisation, up.required), (Some(0.0), Some(0.0), None));
+        // Within a span the size counts, whichever way it goes.
+        inputs.stretch.kind = StretchKind::Span;
+        near(run(&Inputs::Deflection(inputs)).demand, 12e-3, 1e-12);
     }
 }

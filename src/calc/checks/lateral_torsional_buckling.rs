@@ -38,7 +38,7 @@ pub(super) fn check<N: Number, W: Workings<N>>(w: &mut W, inputs: &LateralTorsio
     if !inputs.held {
         w.note(
             CLAUSE,
-            "the flange in compression is not held along the whole segment: lateral-torsional buckling is not verified",
+            "the flange in compression is not held along the whole segment, so that it could buckle sideways",
         );
         return unverified(w, CLAUSE, M_Ed, CheckUnit::Moment, "lateral-torsional buckling");
     }

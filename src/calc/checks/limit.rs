@@ -5,6 +5,7 @@ use crate::quantity::{Length, Ratio, min};
 use crate::results::{Stretch, StretchKind};
 use crate::workings::decimal::{Decimal, three_figures};
 use crate::workings::lines::step;
+use crate::workings::symbol::Symbol;
 use crate::workings::unit::Unit;
 use crate::workings::{Number, Workings, glossary};
 
@@ -67,14 +68,24 @@ fn reference<N: Number, W: Workings<N>>(w: &mut W, stretch: &Stretch) -> Length<
         StretchKind::Overhang | StretchKind::SeatEnd => {
             let L_o = w.given(&glossary::L_o, length);
             w.say("limits look at twice the length of an overhang");
-            step!(w, "EN 1993-1-1, UK NA.2.23", L = 2.0 * L_o);
-            L
+            step!(w, "EN 1993-1-1, UK NA.2.23", L_lim = 2.0 * L_o);
+            L_lim
         }
     }
 }
 
 /// The limit on this stretch.
 pub(super) fn length<N: Number, W: Workings<N>>(w: &mut W, limit: &Limit, stretch: &Stretch) -> Length<N> {
+    named(w, limit, stretch, (&glossary::w_lim).into())
+}
+
+/// The limit on this stretch under a symbol of its own.
+pub(super) fn named<N: Number, W: Workings<N>>(
+    w: &mut W,
+    limit: &Limit,
+    stretch: &Stretch,
+    symbol: Symbol<'static, 0, 1>,
+) -> Length<N> {
     let span = reference(w, stretch);
     let lengths: Vec<Length<N>> = limit.bounds.iter().map(|bound| one(w, bound, span)).collect();
     let mut lengths = lengths.into_iter();
@@ -82,8 +93,7 @@ pub(super) fn length<N: Number, W: Workings<N>>(w: &mut W, limit: &Limit, stretc
     let first = lengths.next().unwrap_or(span);
     let tightest = lengths.fold(first, |tightest, next| min(tightest, next));
     w.say(if limit.bounds.len() > 1 { "the tightest of the bounds is the limit" } else { "limit of the movement" });
-    step!(w, || source(limit), w_lim = tightest);
-    w_lim
+    w.line(|| source(limit), symbol, tightest)
 }
 
 fn one<N: Number, W: Workings<N>>(w: &mut W, bound: &Bound, span: Length<N>) -> Length<N> {

@@ -106,7 +106,7 @@ fn judge<N: Number, W: Workings<N>, const F: i8, const L: i8>(
         (Some(found.utilisation), found.met)
     } else {
         let met =
-            w.when(|| column, demand.at_most(capacity), "the requirement is met", "the requirement is not met");
+            w.judged(|| column, demand.at_most(capacity), "the requirement is met", "the requirement is not met");
         ((over == 0.0).then_some(0.0), met)
     };
     Outcome {

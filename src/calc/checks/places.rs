@@ -57,7 +57,7 @@ pub fn heading(building: &Building, results: &Results, beam: usize, check: &Chec
             Some(Bears::At(wall)) => format!(" at {wall}"),
             None => String::new(),
         },
-        (CheckKind::Torsion, Some(Inputs::Torsion(inputs))) => format!(" from {}", inputs.what),
+        (CheckKind::Torsion, Some(Inputs::Torsion(inputs))) => format!(" ({})", inputs.what),
         _ => String::new(),
     };
     let place = match (check.kind, check.place) {

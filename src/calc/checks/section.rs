@@ -94,7 +94,9 @@ pub(super) fn class<N: Number, W: Workings<N>>(w: &mut W, s: &Yielding<N>) -> Cl
     let Profile { h, b, t_w, t_f, r, .. } = s.profile;
     let eps = s.epsilon;
 
+    w.say("what stands out of the flange and what is flat of the web decide the class");
     step!(w, CLAUSE, c_f = (b - t_w - 2.0 * r) / 2.0);
+    step!(w, CLAUSE, d = h - 2.0 * t_f - 2.0 * r);
     let flange =
         if w.when(CLAUSE, (c_f / t_f).at_most(9.0 * eps), "the flange is class 1", "the flange is not class 1") {
             Class::One
@@ -112,7 +114,6 @@ pub(super) fn class<N: Number, W: Workings<N>>(w: &mut W, s: &Yielding<N>) -> Cl
             Class::Four
         };
 
-    step!(w, CLAUSE, d = h - 2.0 * t_f - 2.0 * r);
     let web = if w.when(CLAUSE, (d / t_w).at_most(72.0 * eps), "the web is class 1", "the web is not class 1") {
         Class::One
     } else if w.when(CLAUSE, (d / t_w).at_most(83.0 * eps), "the web is class 2", "the web is not class 2") {
@@ -197,7 +198,8 @@ pub(super) fn sheared<N: Number, W: Workings<N>>(w: &mut W, steel: &Steel) -> Re
     let A = w.given(&glossary::A, steel.section.area);
     let gamma_M0 = w.given(&glossary::gamma_M0, Ratio::from_si(steel.choices.gamma_m()));
     w.say("the shear area is the web with the roots of the flanges");
-    step!(w, "EN 1993-1-1 6.2.6(3)a", A_v = A - 2.0 * b * t_f + (t_w + 2.0 * r) * t_f);
+    step!(w, "EN 1993-1-1 6.2.6(3)a", A_r = (t_w + 2.0 * r) * t_f);
+    step!(w, "EN 1993-1-1 6.2.6(3)a", A_v = A - 2.0 * b * t_f + A_r);
     let whole = w.when(
         "EN 1993-1-1 6.2.6(3)a",
         (h_w * t_w).at_most(A_v),
@@ -239,10 +241,8 @@ pub(super) fn with_shear<N: Number, W: Workings<N>>(
         rho = min((2.0 * V_Ed / V_pl_Rd - 1.0).squared(), crate::quantity::number(1.0))
     );
     step!(w, "EN 1993-1-1 6.2.8(5)", A_w = h_w * t_w);
-    step!(
-        w,
-        "EN 1993-1-1 6.2.8(5), (6.30)",
-        M_V_Rd = min((modulus - rho * A_w.squared() / (4.0 * t_w)) * f_y / gamma_M0, M_c_Rd)
-    );
+    w.say("what the shear leaves of the modulus resists the moment");
+    step!(w, "EN 1993-1-1 6.2.8(5)", W_V = modulus - rho * A_w.squared() / (4.0 * t_w));
+    step!(w, "EN 1993-1-1 6.2.8(5), (6.30)", M_V_Rd = min(W_V * f_y / gamma_M0, M_c_Rd));
     M_V_Rd
 }

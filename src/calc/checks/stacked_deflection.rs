@@ -14,15 +14,15 @@
 
 use super::Inputs;
 use super::combined::{Writing, signed};
-use super::deflection::{SecondMomentInHand, larger, required};
+use super::deflection::{SecondMomentInHand, required, upward};
 use super::example::characteristic;
+use super::places::the_wall;
 use super::{Combined, Outcome, Required, judge, limit};
 use crate::limits::Limit;
 use crate::limits::{Bound, LimitFrom, Movement};
-use crate::quantity::Length;
 use crate::quantity::SecondMoment;
-use crate::results::StretchKind;
-use crate::results::{CheckUnit, Stretch};
+use crate::quantity::{Length, max};
+use crate::results::{CheckUnit, Stretch, StretchKind};
 use crate::workings::lines::step;
 use crate::workings::{Number, Workings, glossary};
 
@@ -78,42 +78,66 @@ pub(super) fn check<N: Number, W: Workings<N>>(w: &mut W, inputs: &StackedDeflec
     let w_own = signed(w, &inputs.own, 1.0, &own);
     let w_inh = inherited(w, &inputs.inherited);
     let w_set = settled(w, inputs.settled);
-    w.say("own, inherited and settled movement add up");
-    let sum = match w_set {
-        Some(w_set) => w_own + w_inh + w_set,
-        None => w_own + w_inh,
+    let sum = match (w_inh, w_set) {
+        (Some(w_inh), Some(w_set)) => w_own + w_inh + w_set,
+        (Some(from_below), None) | (None, Some(from_below)) => w_own + from_below,
+        (None, None) => w_own,
     };
+    w.say(match (w_inh, w_set) {
+        (None, None) => "neither bearing moves under the loads: the stacked movement is the beam\u{2019}s own",
+        (None, Some(_)) => "own and settled movement add up",
+        (Some(_), None) => "own and inherited movement add up",
+        (Some(_), Some(_)) => "own, inherited and settled movement add up",
+    });
     step!(w, "common practice", w_st = sum);
+    let w_lim = match &inputs.beside {
+        None => limit::length(w, &inputs.limit, &inputs.stretch),
+        Some(beside) => {
+            let of_overhang = limit::named(w, &inputs.limit, &inputs.stretch, glossary::w_lim.of("overhang"));
+            let of_span = limit::named(w, &inputs.limit, beside, glossary::w_lim.of("span"));
+            w.say("the larger of the overhang\u{2019}s limit and that of the span beside it counts");
+            step!(w, "common practice", w_lim = max(of_overhang, of_span));
+            w_lim
+        }
+    };
     let up = w_st.plain().si() < 0.0;
+    if up && inputs.stretch.kind != StretchKind::Span {
+        let outcome = upward(w, limit::bounds(&inputs.limit), w_lim);
+        if let Some(rule) = &inputs.hand_rule {
+            hand_rule(w, rule);
+        }
+        return outcome;
+    }
     let size = if up {
         step!(w, "common practice", w_up = -w_st);
         w_up
     } else {
         w_st
     };
-
-    let mut w_lim = limit::length(w, &inputs.limit, &inputs.stretch);
-    if let Some(beside) = &inputs.beside {
-        let of_span = limit::length(w, &inputs.limit, beside);
-        w.say("the larger of the overhang\u{2019}s limit and that of the span beside it counts");
-        w_lim = w.line("common practice", glossary::w_lim.of("max"), larger(w_lim, of_span));
-    }
     let outcome = judge(w, "", size, w_lim, CheckUnit::Length);
 
     let required = required(w, &inputs.second_moment, |w, I_y| {
         let down = |movement: Length<N>| if up { -movement } else { movement };
-        let used = match w_set {
-            Some(w_set) => w_lim - down(w_inh) - down(w_set),
-            None => w_lim - down(w_inh),
+        let used = match (w_inh, w_set) {
+            (Some(w_inh), Some(w_set)) => Some(w_lim - down(w_inh) - down(w_set)),
+            (Some(from_below), None) | (None, Some(from_below)) => Some(w_lim - down(from_below)),
+            (None, None) => None,
         };
-        w.say("what the supports have used of the limit is no longer the beam\u{2019}s own");
-        step!(w, "common practice", w_left = used);
-        let some_left = w.when(
-            "common practice",
-            w_left.is_positive(),
-            "something of the limit is left for the beam itself",
-            "the supports have used the whole limit: no second moment of area of this beam keeps it",
-        );
+        let w_left = match used {
+            None => w_lim,
+            Some(left) => {
+                w.say("what the supports have used of the limit is no longer the beam\u{2019}s own");
+                step!(w, "common practice", w_left = left);
+                w_left
+            }
+        };
+        let some_left = used.is_none()
+            || w.when(
+                "common practice",
+                w_left.is_positive(),
+                "something of the limit is left for the beam itself",
+                "the supports have used the whole limit: no second moment of area of this beam keeps it",
+            );
         if !some_left {
             return Required::BudgetUsed;
         }
@@ -127,17 +151,16 @@ pub(super) fn check<N: Number, W: Workings<N>>(w: &mut W, inputs: &StackedDeflec
     Outcome { required, clause: limit::bounds(&inputs.limit), ..outcome }
 }
 
-/// w_inh = w_1 + (w_2 − w_1) x / L.
-fn inherited<N: Number, W: Workings<N>>(w: &mut W, line: &Inherited) -> Length<N> {
+/// w_inh = w_1 + (w_2 − w_1) x / L; none where both bearings stay where they are.
+fn inherited<N: Number, W: Workings<N>>(w: &mut W, line: &Inherited) -> Option<Length<N>> {
     if line.left.movement.si() == 0.0 && line.right.movement.si() == 0.0 {
-        let nought = Length::from_si(0.0);
-        return w.looked_up("common practice", &glossary::w_inh, nought, "both bearings stay where they are");
+        return None;
     }
     let (w_1, w_2) = bearings(w, &line.left, &line.right);
     let (x, L) = (w.given(&glossary::x, line.to_place), w.given(&glossary::L, line.span));
     w.say("what the place inherits is the straight line between the two bearings");
     step!(w, "common practice", w_inh = w_1 + (w_2 - w_1) * x / L);
-    w_inh
+    Some(w_inh)
 }
 
 /// The movements of two bearings, under the names of what they stand on.
@@ -153,12 +176,11 @@ pub(super) fn bearings<N: Number, W: Workings<N>>(
             (false, true) => "wall".to_string(),
             (false, false) => bearing.on.clone(),
         };
-        if bearing.movement.si() == 0.0 {
-            return w.given(glossary::w.of(sub), bearing.movement);
-        }
-        let on = bearing.on.clone();
-        w.looked_up("solution of the whole building", glossary::w.of(sub), bearing.movement, move || {
-            format!("{on} goes down by this much under the bearing.")
+        let on = if bearing.wall { the_wall(&bearing.on) } else { bearing.on.clone() };
+        let still = bearing.movement.si() == 0.0;
+        w.looked_up("solution of the whole building", glossary::w.of(sub), bearing.movement, move || match still {
+            true => format!("{on} does not move under the loads"),
+            false => format!("{on} goes down by this much at the bearing"),
         })
     };
     (one(left, "left"), one(right, "right"))
@@ -174,7 +196,11 @@ fn settled<N: Number, W: Workings<N>>(w: &mut W, settled: Length) -> Option<Leng
 /// Never a check: the sum of the largest own movements down the route, and how far it is off.
 fn hand_rule<N: Number, W: Workings<N>>(w: &mut W, rule: &HandRule) {
     let own = |w: &mut W, (mark, movement): &(String, Length)| w.given(glossary::w_own.of(mark.clone()), *movement);
+    // A beam on walls alone has nothing to add.
     let [first, rest @ ..] = rule.route.as_slice() else { return };
+    if rest.is_empty() {
+        return;
+    }
     let mut sum = own(w, first);
     for next in rest {
         sum = sum + own(w, next);

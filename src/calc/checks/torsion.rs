@@ -21,7 +21,7 @@ pub struct Torsion {
 pub(super) fn check<N: Number, W: Workings<N>>(w: &mut W, inputs: &Torsion) -> Outcome {
     let what = inputs.what.clone();
     let e = w.looked_up(CLAUSE, &glossary::e, inputs.offset, move || {
-        format!("{what} acts beside the web: the torsion that it causes is not verified.")
+        format!("Beside the web: {what}; the torsion that it causes is not verified")
     });
     let outcome = unverified(w, CLAUSE, e, CheckUnit::Length, "torsion");
     Outcome { demand: None, ..outcome }

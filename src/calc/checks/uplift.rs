@@ -28,7 +28,8 @@ pub struct Uplift {
 
 pub(super) fn check<N: Number, W: Workings<N>>(w: &mut W, inputs: &Uplift) -> Outcome {
     let least = Writing::new(&glossary::R_min, &glossary::R, "reactions");
-    let lifting = Writing::new(&glossary::R_up, &glossary::R, "reactions");
+    let lifting = Writing::new(&glossary::R_up, &glossary::R, "reactions")
+        .turned("The bearing lifts; what lifts counts as positive");
     let nothing = Outcome {
         demand: Some(0.0),
         capacity: Some(inputs.held_down.map_or(0.0, Force::si)),

@@ -109,7 +109,12 @@ fn resistance<N: Number, W: Workings<N>>(w: &mut W, inputs: &WebUnderForce, s: &
             let c = w.given(&glossary::c, c);
             w.say("the force stands near the beam\u{2019}s end, type (c)");
             step!(w, "EN 1993-1-5 6.4(1), Figure 6.1", k_F = min(2.0 + 6.0 * (s_s + c) / h_w, number(6.0)));
-            step!(w, "EN 1993-1-5 6.5(3), (6.13)", l_e = min(k_F * E * t_w.squared() / (2.0 * f_y * h_w), s_s + c));
+            let l_e_13 = w.line(
+                "EN 1993-1-5 6.5(3), (6.13)",
+                glossary::l_e.of("13"),
+                k_F * E * t_w.squared() / (2.0 * f_y * h_w),
+            );
+            step!(w, "EN 1993-1-5 6.5(3), (6.13)", l_e = min(l_e_13, s_s + c));
             (k_F, Some(l_e))
         }
     };
@@ -120,7 +125,7 @@ fn resistance<N: Number, W: Workings<N>>(w: &mut W, inputs: &WebUnderForce, s: &
     step!(w, "EN 1993-1-5 6.5(1), (6.9)", m_2 = 0.02 * (h_w / t_f).squared());
 
     let web = Web { s_s, t_f, t_w, a, m_1, l_e, f_y, F_cr };
-    let (mut l_y, mut lambda_F) = web.slenderness(w, m_2);
+    let (mut l_y, mut lambda_F) = web.slenderness(w, Some(m_2));
     let slender = w.when(
         "EN 1993-1-5 6.5(1), (6.9)",
         lambda_F.more_than(number(0.5)),
@@ -128,15 +133,9 @@ fn resistance<N: Number, W: Workings<N>>(w: &mut W, inputs: &WebUnderForce, s: &
         "the slenderness is not above 0.5, so that the web has no part in spreading the force, and the length is found again",
     );
     if !slender {
-        let m_2 = w.looked_up(
-            "EN 1993-1-5 6.5(1), (6.9)",
-            &glossary::m_2,
-            Ratio::from_si(0.0),
-            "the web has no part in spreading the force",
-        );
-        (l_y, lambda_F) = web.slenderness(w, m_2);
+        (l_y, lambda_F) = web.slenderness(w, None);
     }
-    w.say("the web buckles before all of the length resists; what is left resists with the yield strength");
+    w.say("the slenderness decides how much of the length resists with the yield strength");
     step!(w, "EN 1993-1-5 6.4(1), (6.3)", chi_F = min(0.5 / lambda_F, number(1.0)));
     step!(w, "EN 1993-1-5 6.2(1), (6.2)", L_eff = chi_F * l_y);
     step!(w, "EN 1993-1-5 6.2(1), (6.1)", F_Rd = f_y * L_eff * t_w / gamma_M1);
@@ -191,39 +190,51 @@ struct Web<N> {
 }
 
 impl<N: Number> Web<N> {
-    fn slenderness<W: Workings<N>>(&self, w: &mut W, m_2: Ratio<N>) -> (Length<N>, Ratio<N>) {
+    /// l_y and λ_F; without m_2 (it is 0) they carry a 0 in their names.
+    fn slenderness<W: Workings<N>>(&self, w: &mut W, m_2: Option<Ratio<N>>) -> (Length<N>, Ratio<N>) {
         let Web { s_s, t_f, t_w, a, m_1, f_y, F_cr, .. } = *self;
-        let within = |w: &mut W| {
-            w.line(
-                "EN 1993-1-5 6.5(2), (6.10)",
-                glossary::l_y.of("10"),
-                s_s + 2.0 * t_f * (1.0 + (m_1 + m_2).root()),
-            )
-        };
-        let l_y = match self.l_e {
-            None => {
-                w.say("the force spreads through the flange, at most up to the stiffeners");
-                step!(w, "EN 1993-1-5 6.5(2), (6.10)", l_y = min(s_s + 2.0 * t_f * (1.0 + (m_1 + m_2).root()), a));
-                l_y
+        let named = |with: &'static str, without: &'static str| if m_2.is_some() { with } else { without };
+        w.say(match self.l_e {
+            None => "the force spreads through the flange, at most up to the stiffeners",
+            Some(_) => {
+                "the force spreads through the flange; the least length counts, at most up to the stiffeners"
             }
+        });
+        let m = match m_2 {
+            Some(m_2) => {
+                step!(w, "EN 1993-1-5 6.5(2), (6.10)", m = m_1 + m_2);
+                m
+            }
+            None => m_1,
+        };
+        let l_y_10 = w.line(
+            "EN 1993-1-5 6.5(2), (6.10)",
+            glossary::l_y.of(named("10", "10,0")),
+            s_s + 2.0 * t_f * (1.0 + m.root()),
+        );
+        let least = match self.l_e {
+            None => min(l_y_10, a),
             Some(l_e) => {
-                w.say(
-                    "the force spreads through the flange; the least length counts, at most up to the stiffeners",
+                const ELEVEN: &str = "EN 1993-1-5 6.5(3), (6.11)";
+                let m_e = match m_2 {
+                    Some(m_2) => w.line(ELEVEN, &glossary::m_e, m_1 / 2.0 + (l_e / t_f).squared() + m_2),
+                    None => w.line(ELEVEN, glossary::m_e.of("0"), m_1 / 2.0 + (l_e / t_f).squared()),
+                };
+                let l_y_11 = w.line(ELEVEN, glossary::l_y.of(named("11", "11,0")), l_e + t_f * m_e.root());
+                let l_y_12 = w.line(
+                    "EN 1993-1-5 6.5(3), (6.12)",
+                    glossary::l_y.of(named("12", "12,0")),
+                    l_e + t_f * m.root(),
                 );
-                let l_y_10 = within(w);
-                let l_y_11 = w.line(
-                    "EN 1993-1-5 6.5(3), (6.11)",
-                    glossary::l_y.of("11"),
-                    l_e + t_f * (m_1 / 2.0 + (l_e / t_f).squared() + m_2).root(),
-                );
-                let l_y_12 =
-                    w.line("EN 1993-1-5 6.5(3), (6.12)", glossary::l_y.of("12"), l_e + t_f * (m_1 + m_2).root());
-                step!(w, "EN 1993-1-5 6.5(3)", l_y = min(min(min(l_y_10, l_y_11), l_y_12), a));
-                l_y
+                min(min(min(l_y_10, l_y_11), l_y_12), a)
             }
         };
+        let without = m_2.is_none();
+        let symbol = if without { glossary::l_y.of("0") } else { (&glossary::l_y).into() };
+        let l_y = w.line("EN 1993-1-5 6.5", symbol, least);
         w.say("slenderness of the web");
-        step!(w, "EN 1993-1-5 6.4(1), (6.4)", lambda_F = (l_y * t_w * f_y / F_cr).root());
+        let symbol = if without { glossary::lambda_F.of("0") } else { (&glossary::lambda_F).into() };
+        let lambda_F = w.line("EN 1993-1-5 6.4(1), (6.4)", symbol, (l_y * t_w * f_y / F_cr).root());
         (l_y, lambda_F)
     }
 }

@@ -145,7 +145,11 @@ fn generated_inputs_take_every_branch() {
         "No second moment of area of this beam keeps the limit.",
         "Something of the limit is left for the beam itself.",
         "The supports have used the whole limit: no second moment of area of this beam keeps it.",
-        "Both bearings stay where they are.",
+        "The overhang goes up, and limits look at its downward movement: nothing of it is used.",
+        "Neither bearing moves under the loads: the stacked movement is the beam\u{2019}s own.",
+        "Own and settled movement add up.",
+        "Own and inherited movement add up.",
+        "Own, inherited and settled movement add up.",
         "The hand rule is on the safe side.",
         "The hand rule is on the unsafe side.",
     ] {

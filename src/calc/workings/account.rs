@@ -40,7 +40,8 @@ pub enum Step {
     /// symbol = result, from a table or from elsewhere.
     Value { symbol: Written, result: Figure },
     /// Two sides compared; the relation is the one that holds.
-    Comparison { left: Side, right: Side, relation: Relation, unit: Unit, undecided: bool },
+    /// `ring`: it is itself the result of a check.
+    Comparison { left: Side, right: Side, relation: Relation, unit: Unit, undecided: bool, ring: bool },
     /// Demand over capacity = utilisation: a check's result, where the pencil ring stands.
     Requirement { formula: Formula, figures: Formula, result: Figure, met: bool, undecided: bool },
 }
@@ -207,13 +208,14 @@ impl<'a> Writer<'a> {
             What::Value { variable } => {
                 Some(Step::Value { symbol: state.variables[*variable].written(), result: self.result(*variable) })
             }
-            What::Comparison { left, right, relation, dimension } => {
+            What::Comparison { left, right, relation, dimension, ring } => {
                 let unit = self.unit_of(*left, *right, *dimension);
                 Some(Step::Comparison {
                     left: self.side(record, *left, unit),
                     right: self.side(record, *right, unit),
                     relation: *relation,
                     unit,
+                    ring: *ring,
                     undecided: self.figures.sides(record).undecided,
                 })
             }

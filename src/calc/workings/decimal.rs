@@ -8,6 +8,12 @@ use super::unit::Unit;
 /// U+2212, the minus sign.
 pub const MINUS: char = '\u{2212}';
 
+/// Powers of ten that a double holds exactly.
+const TENS: [f64; 23] = [
+    1e0, 1e1, 1e2, 1e3, 1e4, 1e5, 1e6, 1e7, 1e8, 1e9, 1e10, 1e11, 1e12, 1e13, 1e14, 1e15, 1e16, 1e17, 1e18, 1e19,
+    1e20, 1e21, 1e22,
+];
+
 /// A decimal number `digits × 10^exponent` with a sign; zero has none.
 #[derive(Clone, Copy, Debug, PartialEq, Eq)]
 pub struct Decimal {
@@ -100,9 +106,15 @@ impl Decimal {
 
     /// The decimal read back as a double.
     pub fn value(self) -> f64 {
-        let sign = if self.negative { "-" } else { "" };
-        // A decimal of at most 17 digits always reads.
-        format!("{sign}{}e{}", self.digits, self.exponent).parse().unwrap_or(f64::NAN)
+        let sign = if self.negative { -1.0 } else { 1.0 };
+        // Up to these sizes digits and power of ten are exact doubles, so that one operation rounds correctly.
+        let exact = self.digits < 1 << 53;
+        match usize::try_from(self.exponent.unsigned_abs()).ok().and_then(|n| TENS.get(n)) {
+            Some(ten) if exact && self.exponent >= 0 => sign * (self.digits as f64 * ten),
+            Some(ten) if exact => sign * (self.digits as f64 / ten),
+            // A decimal of at most 17 digits always reads.
+            _ => sign * format!("{}e{}", self.digits, self.exponent).parse().unwrap_or(f64::NAN),
+        }
     }
 
     /// Times ten to a power: only the point moves.
@@ -117,7 +129,7 @@ impl Decimal {
 
     /// One unit of the last figure.
     pub fn unit_of_last_figure(self) -> f64 {
-        format!("1e{}", self.exponent).parse().unwrap_or(f64::NAN)
+        Decimal { negative: false, digits: 1, exponent: self.exponent }.value()
     }
 
     /// Number of figures, leading zeros not counted.
@@ -312,5 +324,49 @@ mod tests {
         assert_eq!(one_in(0.001_915), "1/522");
         assert_eq!(one_in(-0.002), "1/500");
         assert_eq!(one_in(0.0), "0");
+    }
+
+    #[test]
+    fn every_rounding_lies_within_half_a_unit_and_reads_back_as_printed() {
+        let mut state = 1u64;
+        let mut unit = || {
+            state = state.wrapping_mul(6_364_136_223_846_793_005).wrapping_add(1_442_695_040_888_963_407);
+            (state >> 11) as f64 / (1u64 << 53) as f64
+        };
+        for _ in 0..20_000 {
+            let x = (unit() - 0.5) * 10f64.powi((unit() * 18.0) as i32 - 9);
+            for (rounding, kept) in [
+                (Rounding::Significant(3), 3),
+                (Rounding::Significant(7), 7),
+                (Rounding::Places(1), 17),
+                (Rounding::Places(3), 17),
+            ] {
+                let d = Decimal::rounded(x, rounding, Unit::Kn).unwrap();
+                let half = 0.5 * d.moved(3).unit_of_last_figure();
+                assert!((d.moved(3).value() - x).abs() <= half * (1.0 + 1e-9), "{x} {rounding:?} {d}");
+                assert!(d.figures() <= kept, "{x} {rounding:?} {d}");
+                let text = d.to_string();
+                assert!(!text.contains('-'), "{text}");
+                let long: f64 = format!("{}e{}", d.digits, d.exponent).parse().unwrap();
+                assert_eq!(long, d.value().abs(), "{text}");
+                let read: f64 = text.replace(MINUS, "-").parse().unwrap();
+                assert_eq!(read, d.value(), "{text}");
+                assert!(!(read == 0.0 && text.contains(MINUS)), "{text}");
+            }
+        }
+    }
+
+    #[test]
+    fn one_value_rounded_coarser_is_the_finer_figure_rounded_again() {
+        // Except where the finer one ends in 5, its rounding to fewer figures is the rounding of the value itself.
+        for n in 1..20_000u32 {
+            let x = f64::from(n).sqrt() * 7.3;
+            let (fine, coarse) = (Decimal::significant(x, 5).unwrap(), Decimal::significant(x, 3).unwrap());
+            let ends = fine.to_string().replace('.', "");
+            if ends.ends_with("50") {
+                continue;
+            }
+            assert_eq!(Decimal::significant(fine.value(), 3).unwrap(), coarse, "{x}");
+        }
     }
 }

@@ -262,7 +262,7 @@ impl Rounded {
     }
 
     fn can_grow(&self) -> bool {
-        self.rounding.is_some() && !self.settled && self.value != 0.0 && self.decimal.figures() < MOST
+        self.rounding.is_some() && !self.settled && self.value.is_normal() && self.decimal.figures() < MOST
     }
 
     fn grow(&mut self) {
@@ -301,7 +301,13 @@ fn first_rounding(unit: Unit, value: f64, rule: Rounding) -> Rounding {
         }
         Rounding::Significant(n) if unit == Unit::One => {
             let fine = Decimal::significant(value, n).is_some_and(|d| d.last_place() < -i32::from(FINEST_RATIO));
-            if fine { Rounding::Places(FINEST_RATIO) } else { Rounding::Significant(n) }
+            let coarse = Decimal::rounded(value, Rounding::Places(FINEST_RATIO), unit);
+            match (fine, coarse.is_some_and(|d| !d.is_zero())) {
+                (false, _) => Rounding::Significant(n),
+                (true, true) => Rounding::Places(FINEST_RATIO),
+                // Something that is not nought never prints as nought.
+                (true, false) => Rounding::Significant(1),
+            }
         }
         rule => rule,
     }

@@ -73,7 +73,11 @@ pub(super) fn substituted(state: &State, figures: &Figures, node: NodeId, unit: 
     };
     let number = |id: usize| in_unit(id, state.variables[id].info.unit);
     let measured = |inner: NodeId, unit: Unit, formula: Formula| match state.nodes[inner as usize].node {
-        Node::Variable(id) => in_unit(id, unit),
+        // The number of units is a pure number.
+        Node::Variable(id) => match in_unit(id, unit) {
+            Formula::Number(figure) => Formula::Number(Figure::pure(figure.decimal)),
+            other => other,
+        },
         _ => formula,
     };
     if own_power(state, node) == Some(unit.power_in_n_and_mm()) || is_plain_number(state, node) {

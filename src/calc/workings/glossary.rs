@@ -59,6 +59,7 @@ glossary! {
     I_y: SecondMoment, "I" "y", "second moment of area", Cm4;
     h_w: Length, "h" "w", "depth of the web between the flanges", Mm;
     A_w: Area, "A" "w", "area of the web", Mm2;
+    A_r: Area, "A" "r", "area of the flanges over the web and its roots", Mm2;
     A_v: Area, "A" "v", "shear area", Mm2;
 
     // The material.
@@ -97,6 +98,7 @@ glossary! {
     M_c_Rd: Moment, "M" "c,Rd", "design resistance to bending", Knm;
     V_pl_Rd: Force, "V" "pl,Rd", "design resistance to shear", Kn;
     rho: Ratio, "ρ" "", "reduction of the web's yield strength by shear", One;
+    W_V: Volume, "W" "V", "modulus that the shear leaves", Cm3;
     M_V_Rd: Moment, "M" "V,Rd", "resistance to bending that the shear leaves", Knm;
 
     // Web under a concentrated force.
@@ -106,6 +108,8 @@ glossary! {
     k_F: Ratio, "k" "F", "buckling coefficient of the web", One;
     m_1: Ratio, "m" "1", "part of the flange in spreading the force", One;
     m_2: Ratio, "m" "2", "part of the web in spreading the force", One;
+    m: Ratio, "m" "", "part of flange and web in spreading the force", One;
+    m_e: Ratio, "m" "e", "part of flange, web and loaded length in spreading the force", One;
     l_e: Length, "l" "e", "loaded length at the beam's end", Mm;
     l_y: Length, "l" "y", "effective loaded length", Mm;
     F_cr: Force, "F" "cr", "critical force of the web", Kn;
@@ -121,7 +125,8 @@ glossary! {
     eta: Ratio, "η" "", "web under force and moment together", One;
 
     // Movements.
-    L: Length, "L" "", "span", Mm;
+    L: Length, "L" "", "distance between the bearings", Mm;
+    L_lim: Length, "L" "lim", "length that the limit refers to", Mm;
     L_o: Length, "L" "o", "length of the overhang", Mm;
     x: Length, "x" "", "distance from the left bearing", Mm;
     n: Ratio, "n" "", "part of the span that is the limit", One;

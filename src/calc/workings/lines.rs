@@ -80,6 +80,10 @@ pub trait Workings<N: Number> {
         capacity: Q<N, F, L>,
     ) -> Requirement;
 
+    /// [`Workings::when`] as the result of a check that has no ratio: a capacity of nought.
+    #[track_caller]
+    fn judged(&mut self, clause: impl Words, comparison: Comparison<N>, yes: impl Words, no: impl Words) -> bool;
+
     /// The sentence of the results that follow, up to the next decision, result of a check or sentence.
     fn say(&mut self, words: impl Words);
 
@@ -142,6 +146,11 @@ impl Workings<f64> for Silent {
 
     #[inline]
     fn when(&mut self, _: impl Words, comparison: Comparison<f64>, _: impl Words, _: impl Words) -> bool {
+        comparison.holds()
+    }
+
+    #[inline]
+    fn judged(&mut self, _: impl Words, comparison: Comparison<f64>, _: impl Words, _: impl Words) -> bool {
         comparison.holds()
     }
 
@@ -246,13 +255,18 @@ impl<'t> Workings<Traced<'t>> for &'t Tape {
         yes: impl Words,
         no: impl Words,
     ) -> bool {
-        let (left, right) = (comparison.left.on(self), comparison.right.on(self));
-        let holds = comparison.relation.holds(comparison.left.value(), comparison.right.value());
-        let words = sentence(&if holds { yes.words() } else { no.words() });
-        let relation = if holds { comparison.relation } else { comparison.relation.opposite() };
-        let what = What::Comparison { left, right, relation, dimension: comparison.dimension };
-        self.with(|s| s.record(clause.words(), words, what));
-        holds
+        compared(self, clause.words(), comparison, (yes, no), false)
+    }
+
+    #[track_caller]
+    fn judged(
+        &mut self,
+        clause: impl Words,
+        comparison: Comparison<Traced<'t>>,
+        yes: impl Words,
+        no: impl Words,
+    ) -> bool {
+        compared(self, clause.words(), comparison, (yes, no), true)
     }
 
     #[track_caller]
@@ -292,25 +306,39 @@ impl<'t> Workings<Traced<'t>> for &'t Tape {
     }
 }
 
+#[track_caller]
+fn compared(
+    tape: &Tape,
+    clause: String,
+    comparison: Comparison<Traced<'_>>,
+    (yes, no): (impl Words, impl Words),
+    ring: bool,
+) -> bool {
+    let (left, right) = (comparison.left.on(tape), comparison.right.on(tape));
+    let holds = comparison.relation.holds(comparison.left.value(), comparison.right.value());
+    let words = sentence(&if holds { yes.words() } else { no.words() });
+    let relation = if holds { comparison.relation } else { comparison.relation.opposite() };
+    let what = What::Comparison { left, right, relation, dimension: comparison.dimension, ring };
+    tape.with(|s| s.record(clause, words, what));
+    holds
+}
+
 impl State {
     /// Puts a record where it belongs; one that stands already, unchanged, is not written twice.
     fn record(&mut self, clause: String, words: String, what: What) {
-        let opened = |open: &Option<(u32, String)>, records: &[Record]| {
-            open.as_ref().is_some_and(|(group, _)| records.last().is_some_and(|last| last.group == *group))
-        };
-        if self.stands(&what, &clause) {
-            // What was said of it stands there too.
-            if !opened(&self.open, &self.records) {
-                self.open = None;
-            }
-            return;
-        }
         let joins = match what {
             What::Equation { .. } | What::Requirement { .. } => true,
             // A table's row has its own sentence, if any.
             What::Value { .. } => words.is_empty(),
             What::Chapter | What::Note | What::Comparison { .. } => false,
         };
+        if self.stands(&what, &clause) {
+            // What was said of several results still holds for those of them that are new.
+            if !joins {
+                self.open = None;
+            }
+            return;
+        }
         let (group, sentence) = match (&what, self.open.take(), self.records.last()) {
             (_, Some((group, said)), _) if joins => {
                 self.open = Some((group, said.clone()));

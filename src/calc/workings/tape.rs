@@ -90,10 +90,27 @@ pub(super) struct Record {
 pub(super) enum What {
     Chapter,
     Note,
-    Equation { variable: VariableId, node: NodeId },
-    Value { variable: VariableId },
-    Comparison { left: NodeId, right: NodeId, relation: Relation, dimension: Dimension },
-    Requirement { demand: NodeId, capacity: NodeId, node: NodeId, variable: VariableId },
+    Equation {
+        variable: VariableId,
+        node: NodeId,
+    },
+    Value {
+        variable: VariableId,
+    },
+    /// `ring`: the comparison is itself the result of a check.
+    Comparison {
+        left: NodeId,
+        right: NodeId,
+        relation: Relation,
+        dimension: Dimension,
+        ring: bool,
+    },
+    Requirement {
+        demand: NodeId,
+        capacity: NodeId,
+        node: NodeId,
+        variable: VariableId,
+    },
 }
 
 /// Something that must never be printed; a test walks every check for it.
@@ -217,10 +234,8 @@ impl State {
             (Node::Variable(a), Node::Variable(b)) => a == b,
             (Node::Measured(a, u), Node::Measured(b, v)) => u == v && self.same_formula(a, b),
             _ => {
-                let (a_parts, b_parts) = (a.node.parts(), b.node.parts());
                 std::mem::discriminant(&a.node) == std::mem::discriminant(&b.node)
-                    && a_parts.len() == b_parts.len()
-                    && a_parts.iter().zip(&b_parts).all(|(a, b)| self.same_formula(*a, *b))
+                    && a.node.parts().zip(b.node.parts()).all(|(a, b)| self.same_formula(a, b))
             }
         }
     }
@@ -261,17 +276,20 @@ impl State {
 }
 
 impl Node {
-    pub fn parts(self) -> Vec<NodeId> {
-        match self {
-            Node::Literal | Node::Constant(_) | Node::Variable(_) => vec![],
-            Node::Negative(a) | Node::Square(a) | Node::Cube(a) | Node::Root(a) | Node::Measured(a, _) => vec![a],
+    pub fn parts(self) -> impl Iterator<Item = NodeId> {
+        let parts = match self {
+            Node::Literal | Node::Constant(_) | Node::Variable(_) => [None, None],
+            Node::Negative(a) | Node::Square(a) | Node::Cube(a) | Node::Root(a) | Node::Measured(a, _) => {
+                [Some(a), None]
+            }
             Node::Sum(a, b)
             | Node::Difference(a, b)
             | Node::Product(a, b)
             | Node::Quotient(a, b)
             | Node::Least(a, b)
-            | Node::Greatest(a, b) => vec![a, b],
-        }
+            | Node::Greatest(a, b) => [Some(a), Some(b)],
+        };
+        parts.into_iter().flatten()
     }
 }
 

@@ -141,8 +141,7 @@ fn not_for_height(row: &TypedLoad, build_up: Option<usize>, typed: &Typed, found
     let name = name.given().map(|name| (name.value.clone(), name.span.clone()));
     let Some((name, span)) = name else { return };
     let fact = format!("{name} has {key}, so no height");
-    let mut fault =
-        Fault::new(Name::BuildUpNotForHeight, Some(span), fact, "give it a width, or layers alone");
+    let mut fault = Fault::new(Name::BuildUpNotForHeight, Some(span), fact, "give it a width, or layers alone");
     fault.also.extend(typed.build_ups[at].name.as_ref().map(|name| name.span.clone()));
     found.add(fault);
 }

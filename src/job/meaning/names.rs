@@ -101,9 +101,7 @@ impl Names {
 
     fn unknown(&self, name: Name, typed: &At<String>, found: &mut Findings) {
         let (fact, known, hidden) = match name {
-            Name::BuildUpUnknown => {
-                ("no build-up has this name", &self.build_up_places, self.build_ups_hidden)
-            }
+            Name::BuildUpUnknown => ("no build-up has this name", &self.build_up_places, self.build_ups_hidden),
             _ => ("no wall, beam or post has this name", &self.support_places, self.supports_hidden),
         };
         let mut near = match found.may_look_for_near_names() {

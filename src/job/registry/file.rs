@@ -66,6 +66,15 @@ pub(super) const ENTRIES: &[Entry] = &[
         right: "length = \"5.40 m\"",
     },
     Entry {
+        name: Name::TooMany,
+        text: "too-many",
+        kind: Fault,
+        meaning: "The file has more than 20000 faults and warnings. It is most likely no job at all; those beyond the \
+                  first 20000 were counted and not kept.",
+        wrong: "a list of parts saved as job.toml",
+        right: "a job file, begun with sagledger new",
+    },
+    Entry {
         name: Name::LanguageNewer,
         text: "language-newer",
         kind: Fault,

@@ -31,6 +31,7 @@ pub enum Name {
     NestedTooDeep,
     Syntax,
     KeyTwice,
+    TooMany,
     LanguageNewer,
     LogoOutsideFolder,
     LogoMissing,

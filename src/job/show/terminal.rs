@@ -14,6 +14,8 @@ const TEXT: usize = 7;
 const WIDE: usize = 120;
 /// So many are shown; the last line says how many more there are.
 const SHOWN: usize = 50;
+/// Pipes get lines of the file uncut, up to a length that no line written by hand has.
+const UNCUT: usize = 4000;
 /// Cells of a cut line that show what comes before the part.
 const CONTEXT: usize = 24;
 
@@ -41,7 +43,7 @@ pub fn faults(source: &Source, findings: &[Fault], screen: Screen) -> String {
         last.push(format!("{more} more than are shown"));
     }
     if faults > 0 {
-        lines.push(format!("not read: {}; nothing was computed", last.join(", ")));
+        lines.extend(wrapped(&format!("not read: {}; nothing was computed", last.join(", ")), 0, screen));
     } else if more > 0 {
         lines.push(last.join(", "));
     }
@@ -106,10 +108,11 @@ fn marked(source: &Source, span: &Span, remedy: &str, screen: Screen) -> Vec<Str
     let indent = line.len() - line.trim_start().len();
     // A part may begin in the indent, never before it shows.
     let from = (line_span.start + indent).min(part.start);
-    let before = shown(source.slice(&(from..part.start)), screen);
-    let within = shown(source.slice(&part), screen);
-    let after = shown(source.slice(&(part.end..line_span.end)), screen);
-    let room = screen.width.map(|width| width.saturating_sub(TEXT).max(20));
+    let room = screen.width.map_or(UNCUT, |width| width.saturating_sub(TEXT).max(20));
+    let near = |text: &str, end: bool| shown(nearest_part(text, 16 * room, end), screen);
+    let before = near(source.slice(&(from..part.start)), true);
+    let within = near(source.slice(&part), false);
+    let after = near(source.slice(&(part.end..line_span.end)), false);
     let (text, wave_from, wave) = window(&before, &within, after.trim_end(), room, screen);
     let mut lines = vec![format!("{number:>5}  {text}")];
     let wave_line = format!("{}{}", " ".repeat(TEXT + wave_from), "~".repeat(wave));
@@ -132,12 +135,12 @@ fn marked(source: &Source, span: &Span, remedy: &str, screen: Screen) -> Vec<Str
 
 /// A line of the file cut so that its part shows: the text, where the part begins in it, and how long it is, in
 /// cells.
-fn window(before: &str, part: &str, after: &str, room: Option<usize>, screen: Screen) -> (String, usize, usize) {
+fn window(before: &str, part: &str, after: &str, room: usize, screen: Screen) -> (String, usize, usize) {
     let whole = format!("{before}{part}{after}");
     let (before_cells, part_cells) = (before.width(), part.width().max(1));
-    let Some(room) = room.filter(|room| whole.width() > *room) else {
+    if whole.width() <= room {
         return (whole, before_cells, part_cells);
-    };
+    }
     let dots = if screen.unicode { "…" } else { "..." };
     // The part with what follows it fits from the beginning: cut the end alone.
     if before_cells + part_cells + dots.width() <= room {
@@ -155,6 +158,16 @@ fn window(before: &str, part: &str, after: &str, room: Option<usize>, screen: Sc
     };
     let wave = part_cells.min(left).max(1);
     (format!("{lead}{kept}{text}"), start, wave)
+}
+
+/// As much of a text as could ever show: its end, or its beginning. Lines may be megabytes long.
+fn nearest_part(text: &str, bytes: usize, end: bool) -> &str {
+    if text.len() <= bytes {
+        return text;
+    }
+    let cut = if end { text.len() - bytes } else { bytes };
+    let cut = (cut..text.len()).find(|at| text.is_char_boundary(*at)).unwrap_or(text.len());
+    if end { &text[cut..] } else { &text[..cut] }
 }
 
 fn cells_from_start(text: &str, cells: usize) -> &str {

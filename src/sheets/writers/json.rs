@@ -9,7 +9,8 @@
 //! - `"value"`: `symbol` = `result` `unit`, from a table or from elsewhere;
 //! - `"comparison"`: `left` `relation` `right` in `unit`; a side is `{"formula": NODE or null, "figures": NODE or null,
 //!   "result": "5.73"}`: in symbols (null: a number alone), with figures (null: a symbol or number alone), its value.
-//!   `result` is "5.73 ≤ 8.32", `undecided` true where the printed figures cannot show it;
+//!   `result` is "5.73 ≤ 8.32", `undecided` true where the printed figures cannot show it; `ring` true where it is
+//!   itself the result of a check;
 //! - `"requirement"`: `formula` = `figures` = `result`; `met`, `undecided`; here stands the pencil ring.
 //!
 //! Every step has an `alt`. A node is one of
@@ -68,7 +69,7 @@ pub fn step(step: &Step) -> Value {
             "unit": result.unit.name(),
             "alt": alt,
         }),
-        Step::Comparison { left, right, relation, unit, undecided } => json!({
+        Step::Comparison { left, right, relation, unit, undecided, ring } => json!({
             "kind": "comparison",
             "left": side(left),
             "right": side(right),
@@ -76,6 +77,7 @@ pub fn step(step: &Step) -> Value {
             "result": format!("{} {} {}", left.result.decimal, relation.sign(), right.result.decimal),
             "unit": unit.name(),
             "undecided": undecided,
+            "ring": ring,
             "alt": alt,
         }),
         Step::Requirement { formula, figures, result, met, undecided } => json!({
@@ -136,4 +138,3 @@ fn at_least(inner: &Formula, least: Tightness, form: Form) -> Value {
     let node = node(inner, form);
     if tightness(inner) < least { json!({"paren": node}) } else { node }
 }
-

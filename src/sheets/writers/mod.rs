@@ -7,11 +7,15 @@ pub mod speech;
 
 use sagledger_calc::workings::formula::Formula;
 
-/// Whether a formula stands in symbols (factors side by side) or in figures (× between them).
+/// How a formula stands.
 #[derive(Clone, Copy, Debug, PartialEq, Eq)]
 pub enum Form {
+    /// In symbols, factors side by side.
     Symbols,
+    /// In figures, × between them, with the powers of ten that make the units meet.
     Figures,
+    /// In figures that carry their units instead of powers of ten.
+    Units,
 }
 
 /// How tightly a formula holds together.
@@ -37,7 +41,7 @@ fn tightness(formula: &Formula) -> Tightness {
 
 /// Whether a sign of multiplication stands between two factors.
 fn times_between(form: Form, next: &Formula) -> bool {
-    form == Form::Figures || starts_with_figure(next)
+    form != Form::Symbols || starts_with_figure(next)
 }
 
 fn starts_with_figure(formula: &Formula) -> bool {

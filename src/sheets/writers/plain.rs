@@ -24,24 +24,19 @@ pub fn step(step: &Step) -> StepText {
             }
             StepText { lines, result: figure(result) }
         }
-        Step::Value { symbol, result } => {
-            StepText { lines: vec![self::symbol(symbol)], result: figure(result) }
-        }
-        Step::Comparison { left, right, relation, unit, undecided } => {
+        Step::Value { symbol, result } => StepText { lines: vec![self::symbol(symbol)], result: figure(result) },
+        Step::Comparison { left, right, relation, unit, undecided, .. } => {
             let shown = [side(left), side(right)].concat().join(",  ");
             let unit = if unit.name().is_empty() { String::new() } else { format!(" {}", unit.name()) };
-            let mut result =
-                format!("{} {} {}{unit}", left.result.decimal, relation.sign(), right.result.decimal);
+            let mut result = format!("{} {} {}{unit}", left.result.decimal, relation.sign(), right.result.decimal);
             if *undecided {
                 result = format!("{result} ({UNDECIDED})");
             }
             StepText { lines: vec![shown], result }
         }
         Step::Requirement { formula, figures, result, met, undecided } => {
-            let lines = vec![
-                self::formula(formula, Form::Symbols),
-                format!("= {}", self::formula(figures, Form::Figures)),
-            ];
+            let lines =
+                vec![self::formula(formula, Form::Symbols), format!("= {}", self::formula(figures, Form::Figures))];
             let word = if *met { "met" } else { "not met" };
             let decided = if *undecided { format!(" ({UNDECIDED})") } else { String::new() };
             StepText { lines, result: format!("{}  {word}{decided}", figure(result)) }
@@ -81,6 +76,7 @@ pub fn symbol(symbol: &Written) -> String {
 /// A formula with no more brackets than it needs.
 pub fn formula(formula: &Formula, form: Form) -> String {
     match formula {
+        Formula::Number(figure) if form == Form::Units => self::figure(figure),
         Formula::Number(figure) => figure.decimal.to_string(),
         Formula::TenTo(power) => format!("10{}", raised(*power)),
         Formula::Symbol(written) => symbol(written),
@@ -101,6 +97,11 @@ pub fn formula(formula: &Formula, form: Form) -> String {
         }
         Formula::Product(factors) => {
             let mut text = String::new();
+            let carried = |f: &&Formula| form != Form::Units || !matches!(f, Formula::TenTo(_));
+            let factors: Vec<&Formula> = factors.iter().filter(carried).collect();
+            if let [alone] = factors.as_slice() {
+                return self::formula(alone, form);
+            }
             for (place, factor) in factors.iter().enumerate() {
                 let times = times_between(form, factor);
                 if place > 0 {
@@ -108,7 +109,7 @@ pub fn formula(formula: &Formula, form: Form) -> String {
                 }
                 let next = factors.get(place + 1);
                 let divides_next = matches!(factor, Formula::Quotient(..))
-                    && next.is_some_and(|next| !times_between(form, next));
+                    && next.is_some_and(|next: &&Formula| !times_between(form, next));
                 let least = if divides_next { Tightness::Power } else { Tightness::Product };
                 text.push_str(&at_least(factor, least, form));
             }
@@ -118,11 +119,19 @@ pub fn formula(formula: &Formula, form: Form) -> String {
             format!("{} / {}", at_least(over, Tightness::Product, form), at_least(under, Tightness::Power, form))
         }
         Formula::Power(base, exponent) => {
-            format!("{}{}", at_least(base, Tightness::Whole, form), raised(i32::from(*exponent)))
+            let base = match **base {
+                Formula::Number(figure) if form == Form::Units && !figure.unit.name().is_empty() => {
+                    format!("({})", self::figure(&figure))
+                }
+                _ => at_least(base, Tightness::Whole, form),
+            };
+            format!("{base}{}", raised(i32::from(*exponent)))
         }
         Formula::Root(of) => match **of {
             Formula::Symbol(_) => format!("√{}", self::formula(of, form)),
-            Formula::Number(figure) if !figure.decimal.is_negative() => format!("√{}", figure.decimal),
+            Formula::Number(figure) if form != Form::Units && !figure.decimal.is_negative() => {
+                format!("√{}", figure.decimal)
+            }
             _ => format!("√({})", self::formula(of, form)),
         },
         Formula::Least(all) => format!("min({})", listed(all, form)),
@@ -147,4 +156,3 @@ pub fn raised(power: i32) -> String {
     let raised = digits.chars().filter_map(|c| c.to_digit(10)).filter_map(|d| DIGITS.get(d as usize));
     format!("{sign}{}", raised.collect::<String>())
 }
-

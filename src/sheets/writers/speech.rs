@@ -17,7 +17,7 @@ pub fn step(step: &Step) -> String {
             format!("{shown}{figures}; equals {}", figure(result))
         }
         Step::Value { symbol: name, result } => format!("{} equals {}", symbol(name), figure(result)),
-        Step::Comparison { left, right, relation, unit, undecided } => {
+        Step::Comparison { left, right, relation, unit, undecided, .. } => {
             let relation = match relation {
                 Relation::AtMost => "is at most",
                 Relation::MoreThan => "is more than",
