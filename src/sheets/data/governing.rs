@@ -4,7 +4,7 @@ use sagledger_calc::checks::places;
 use sagledger_calc::results::Verdict as Word;
 use serde::Serialize;
 
-use super::text::{Run, breakable, keys};
+use super::text::{breakable, keys};
 use super::view::{Verdict, View, short_clause, verdict};
 
 #[derive(Debug, Serialize)]
@@ -15,7 +15,7 @@ pub(super) struct Governing {
 
 #[derive(Debug, Serialize)]
 struct Group {
-    mark: Run,
+    mark: String,
     section: String,
     rows: Vec<Row>,
 }
@@ -53,7 +53,7 @@ pub(super) fn governing(view: View) -> Governing {
                 Some(title) => format!("{}, {}", beam.section.name, lower(title)),
                 None => beam.section.name.to_string(),
             };
-            Group { mark: view.link(index), section, rows: rows.collect() }
+            Group { mark: beam.mark.clone(), section, rows: rows.collect() }
         })
         .collect();
     let mut notes = Vec::new();

@@ -11,7 +11,7 @@ use sagledger_calc::workings::unit::Unit;
 use serde::Serialize;
 use serde_json::Value;
 
-use super::text::{Run, Runs, breakable, keys, to, words};
+use super::text::{Runs, breakable, keys, to, words};
 use super::view::{View, along, kn, of};
 use crate::package::Paper;
 
@@ -32,7 +32,7 @@ struct Table {
 
 #[derive(Debug, Serialize)]
 struct Group {
-    mark: Run,
+    mark: String,
     rows: Vec<Row>,
 }
 
@@ -59,7 +59,7 @@ pub(super) fn load_path(view: View, paper: Paper, drawings: Vec<Value>) -> LoadP
 fn table(view: View, actions: &[Action]) -> Table {
     let groups = view
         .beams()
-        .map(|(index, beam, result)| Group { mark: view.link(index), rows: rows(view, actions, beam, result) })
+        .map(|(index, beam, result)| Group { mark: beam.mark.clone(), rows: rows(view, actions, beam, result) })
         .collect();
     let totals = &view.results.takedown;
     let figures = |list: &[(Action, Force)]| actions.iter().map(|&a| kn(of(list, a))).collect::<Vec<_>>();

@@ -29,10 +29,6 @@ pub(crate) enum Run {
     Symbol {
         sym: &'static str,
     },
-    /// Words that stand out.
-    Medium {
-        b: String,
-    },
 }
 
 pub(crate) type Runs = Vec<Run>;
@@ -55,10 +51,6 @@ pub(crate) fn to(key: impl Into<String>, text: impl Into<String>) -> Run {
 
 pub(crate) fn symbol(sym: &'static str) -> Run {
     Run::Symbol { sym }
-}
-
-pub(crate) fn medium(text: impl Into<String>) -> Run {
-    Run::Medium { b: text.into() }
 }
 
 /// "a", "a and b", "a, b and c" of pieces.
@@ -102,11 +94,7 @@ pub(crate) fn breakable(text: &str) -> String {
 pub(crate) mod keys {
     pub const BASIS: &str = "basis";
     pub const MATERIALS: &str = "materials";
-    pub const LOADS: &str = "loads";
     pub const LOAD_PATH: &str = "load-path";
-    pub const GOVERNING: &str = "governing";
-    pub const STACKED: &str = "stacked";
-    pub const CAUTIONS: &str = "cautions";
     pub const OUTSIDE: &str = "outside";
     pub const RECORD: &str = "record";
 

@@ -69,7 +69,7 @@ pub fn beam(mark: &str, title: &str, section: &str, length: f64, bearings: Vec<B
     Beam {
         mark: mark.into(),
         title: Some(title.into()),
-        section: *sections::names::find(section).unwrap(),
+        section: *sections::find(section).unwrap(),
         grade: Grade::S275,
         grade_defaulted: true,
         existing: false,
