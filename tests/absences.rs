@@ -38,7 +38,11 @@ fn absent(folder: &str, endings: &[&str], words: &[&str]) {
 
 #[test]
 fn calc_touches_no_file_clock_environment_or_output() {
-    absent("src/calc", &[".rs"], &["std::fs", "std::time", "std::env", "println!", "eprintln!", "std::io", "HashMap"]);
+    absent(
+        "src/calc",
+        &[".rs"],
+        &["std::fs", "std::time", "std::env", "println!", "eprintln!", "std::io", "HashMap"],
+    );
 }
 
 #[test]
@@ -48,7 +52,11 @@ fn the_reader_knows_no_formula_and_no_sheet() {
 
 #[test]
 fn sheets_know_no_solver_and_no_clock() {
-    absent("src/sheets", &[".rs"], &["sagledger_calc::analysis", "std::fs", "SystemTime", "Local::now", "Utc::now"]);
+    absent(
+        "src/sheets",
+        &[".rs"],
+        &["sagledger_calc::analysis", "std::fs", "SystemTime", "Local::now", "Utc::now"],
+    );
 }
 
 #[test]

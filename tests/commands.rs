@@ -107,10 +107,8 @@ fn faults_exit_2_and_write_nothing() {
 #[test]
 fn a_loop_of_beams_names_its_lines() {
     let desk = Desk::new();
-    let job = sample("weir-cottage").replace(
-        "{ on = \"garden wall\", bearing-length = \"200 mm\" }",
-        "{ on = \"R1\", lands = \"2.00 m\" }",
-    );
+    let job = sample("weir-cottage")
+        .replace("{ on = \"garden wall\", bearing-length = \"200 mm\" }", "{ on = \"R1\", lands = \"2.00 m\" }");
     desk.job(job);
     let output = desk.run(&["check"]);
     assert_eq!(output.status.code(), Some(2));

@@ -150,8 +150,7 @@ fn limits(view: View) -> Vec<LimitRow> {
                 reason,
                 source,
             };
-            let same =
-                |r: &&mut LimitRow| r.limit == row.limit && r.reason == row.reason && r.source == row.source;
+            let same = |r: &&mut LimitRow| r.limit == row.limit && r.reason == row.reason && r.source == row.source;
             match rows.iter_mut().skip(first).find(same) {
                 Some(earlier) => earlier.movement = format!("{}, {}", earlier.movement, row.movement),
                 None => rows.push(row),

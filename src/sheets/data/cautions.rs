@@ -37,9 +37,7 @@ pub(super) fn cautions(package: &Package, view: View) -> Cautions {
             vec![
                 words("These calculations follow the standards named on "),
                 sheet(keys::BASIS),
-                words(
-                    ". Local building regulations and the judgement of a locally licensed engineer come first.",
-                ),
+                words(". Local building regulations and the judgement of a locally licensed engineer come first."),
             ],
         ),
         (
@@ -78,10 +76,7 @@ pub(super) fn cautions(package: &Package, view: View) -> Cautions {
                  take load.",
             ),
         ),
-        (
-            walls,
-            say("Lateral stability of the building with walls removed is outside this calculation."),
-        ),
+        (walls, say("Lateral stability of the building with walls removed is outside this calculation.")),
         (
             to_order,
             say(
@@ -103,9 +98,7 @@ pub(super) fn cautions(package: &Package, view: View) -> Cautions {
         ),
         (
             to_order,
-            say(
-                "Steel weights are for planning lifts; the lifting plan and a safe method are the contractor’s.",
-            ),
+            say("Steel weights are for planning lifts; the lifting plan and a safe method are the contractor’s."),
         ),
     ];
     Cautions {

@@ -163,7 +163,13 @@ fn scope(view: View) -> Runs {
             runs.push(words(" down to "));
             let one = walls.len() == 1;
             runs.extend(listed(walls));
-            let verb = if one && count > 1 { "carries them" } else if one { "carries it" } else { carry };
+            let verb = if one && count > 1 {
+                "carries them"
+            } else if one {
+                "carries it"
+            } else {
+                carry
+            };
             let verb = if !one && count == 1 { "carry it" } else { verb };
             runs.push(words(format!(" that {verb}. ")));
         }
@@ -173,9 +179,11 @@ fn scope(view: View) -> Runs {
         Choices::Uk => "the UK national choices",
         Choices::Recommended => "the values recommended in the Eurocodes",
     };
-    let landed = view.building.beams.iter().any(|b| {
-        b.bearings.iter().any(|x| matches!(x.on, sagledger_calc::building::Carrier::Beam { .. }))
-    });
+    let landed = view
+        .building
+        .beams
+        .iter()
+        .any(|b| b.bearings.iter().any(|x| matches!(x.on, sagledger_calc::building::Carrier::Beam { .. })));
     let subject = if count == 1 { "It is" } else { "Every beam is" };
     runs.push(words(if landed {
         format!(
@@ -196,9 +204,9 @@ fn closest(view: View) -> Option<Runs> {
         Some((index, check))
     };
     let all: Option<Vec<_>> = view.beams().map(closest).collect();
-    let (index, check) = all?.into_iter().max_by(|(_, a), (_, b)| {
-        a.utilisation.unwrap_or_default().total_cmp(&b.utilisation.unwrap_or_default())
-    })?;
+    let (index, check) = all?
+        .into_iter()
+        .max_by(|(_, a), (_, b)| a.utilisation.unwrap_or_default().total_cmp(&b.utilisation.unwrap_or_default()))?;
     let _ = verdict(check);
     Some(vec![
         words(format!("{} of ", view.check_name(index, check))),

@@ -16,10 +16,10 @@ mod view;
 use serde::Serialize;
 use serde_json::Value;
 
+use crate::drawings;
 use crate::drawings::diagrams::Diagrams;
 use crate::drawings::scene::Drawing;
 use crate::drawings::stack::Stack;
-use crate::drawings;
 use crate::fonts;
 use crate::glue::PartName;
 use crate::package::{Package, Paper};

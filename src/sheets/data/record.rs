@@ -49,7 +49,11 @@ pub(super) fn record(package: &Package) -> Record {
         fingerprints: present(fingerprints),
         listing,
         replaced: (count > 0).then(|| {
-            let noun = if count == 1 { "character that no font here has is" } else { "characters that no font here has are" };
+            let noun = if count == 1 {
+                "character that no font here has is"
+            } else {
+                "characters that no font here has are"
+            };
             format!("{count} {noun} shown as \u{fffd}; the attached file has the original.")
         }),
     }

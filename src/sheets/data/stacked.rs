@@ -68,7 +68,13 @@ pub(super) fn stacked(view: View, paper: Paper, drawn: Vec<Chain>) -> StackedDef
             hand: hand_rule(movements.hand_rule.si(), movements.stacked.total.value.si()),
         }
     });
-    StackedDeflections { paper: super::paper_name(paper), intro, chains: drawn, rows: rows.collect(), notes: notes(view) }
+    StackedDeflections {
+        paper: super::paper_name(paper),
+        intro,
+        chains: drawn,
+        rows: rows.collect(),
+        notes: notes(view),
+    }
 }
 
 /// "27.7, safe by 11.2 mm": the simple sum against the exact greatest movement.
@@ -95,7 +101,8 @@ fn notes(view: View) -> Vec<Runs> {
             None => combinations.push((name, vec![view.link(index)])),
         }
     }
-    let mut note = vec![words("Each row is at the member’s governing point, under its own governing combination: ")];
+    let mut note =
+        vec![words("Each row is at the member’s governing point, under its own governing combination: ")];
     let count = combinations.len();
     for (n, (name, marks)) in combinations.into_iter().enumerate() {
         if n > 0 {

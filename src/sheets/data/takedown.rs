@@ -125,7 +125,9 @@ fn rows(view: View, actions: &[Action], beam: &Beam, result: &BeamResult) -> Vec
     }
     for bearing in &result.bearings {
         let what = match bearing.on {
-            Carrier::Wall(_) => vec![words(format!("to {}", breakable(&places::carrier(view.building, bearing.on))))],
+            Carrier::Wall(_) => {
+                vec![words(format!("to {}", breakable(&places::carrier(view.building, bearing.on))))]
+            }
             Carrier::Beam { beam, lands } => vec![
                 words("to "),
                 to(keys::beam(beam), breakable(view.mark(beam))),

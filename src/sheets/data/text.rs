@@ -68,9 +68,8 @@ pub(crate) fn listed(items: Vec<Run>) -> Runs {
 
 /// Numbers up to twelve as words, as running text has them.
 pub(crate) fn counted(n: usize) -> String {
-    const WORDS: [&str; 13] = [
-        "no", "one", "two", "three", "four", "five", "six", "seven", "eight", "nine", "ten", "eleven", "twelve",
-    ];
+    const WORDS: [&str; 13] =
+        ["no", "one", "two", "three", "four", "five", "six", "seven", "eight", "nine", "ten", "eleven", "twelve"];
     WORDS.get(n).map_or_else(|| n.to_string(), |word| (*word).to_string())
 }
 

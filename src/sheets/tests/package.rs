@@ -129,7 +129,13 @@ fn the_weights_are_really_there() {
     for page in compiled.document.pages() {
         read(&page.frame, &mut String::new(), &mut faces);
     }
-    for face in ["IBM Plex Sans 400", "IBM Plex Sans Medm 500", "IBM Plex Sans SmBld 600", "IBM Plex Mono 400", "IBM Plex Math 400"] {
+    for face in [
+        "IBM Plex Sans 400",
+        "IBM Plex Sans Medm 500",
+        "IBM Plex Sans SmBld 600",
+        "IBM Plex Mono 400",
+        "IBM Plex Math 400",
+    ] {
         assert!(faces.contains(face), "{face} is not among {faces:?}");
     }
     assert_eq!(faces.len(), 5, "only these: {faces:?}");

@@ -119,6 +119,8 @@ fn beside(beam: &Beam, _hand: &HandCheck, at: f64, span: f64) -> Runs {
         value(decimal::places(stiffness, 0, Unit::Knm2), "kNm²"),
         words(". "),
         symbol("c"),
-        words(" is where a load or the centre of its part stands. Moments under the design loads, own deflection under the characteristic ones."),
+        words(
+            " is where a load or the centre of its part stands. Moments under the design loads, own deflection under the characteristic ones.",
+        ),
     ]
 }

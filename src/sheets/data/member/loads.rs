@@ -47,12 +47,10 @@ fn table(view: View, actions: &[Action], beam: &Beam, result: &BeamResult) -> Lo
             RowLoad::Line { from, to, intensities } => {
                 let varies = intensities.iter().any(|(_, a, b)| a.si() != b.si());
                 let text = |si: f64| decimal::three_figures(si, Unit::KnPerM);
-                let figures = actions.iter().map(|action| {
-                    match intensities.iter().find(|(a, ..)| a == action) {
-                        None => vec![String::new(); if varies { 2 } else { 1 }],
-                        Some((_, a, b)) if varies => vec![text(a.si()), text(b.si())],
-                        Some((_, a, _)) => vec![text(a.si())],
-                    }
+                let figures = actions.iter().map(|action| match intensities.iter().find(|(a, ..)| a == action) {
+                    None => vec![String::new(); if varies { 2 } else { 1 }],
+                    Some((_, a, b)) if varies => vec![text(a.si()), text(b.si())],
+                    Some((_, a, _)) => vec![text(a.si())],
                 });
                 let (from, to) = (along(from.si()), along(to.si()));
                 lines.push(Row {

@@ -225,10 +225,11 @@ fn relies_on(view: View, beam: &Beam) -> Vec<Labelled> {
 /// What a bearing stands on as a label.
 fn on_label(view: View, on: Carrier) -> Run {
     match on {
-        Carrier::Wall(wall) => words(format!(
-            "on {}",
-            breakable(view.building.walls.get(wall).map_or("", |w| w.name.as_str()))
-        )),
-        Carrier::Beam { beam, .. } => super::text::to(keys::beam(beam), format!("on {}", breakable(view.mark(beam)))),
+        Carrier::Wall(wall) => {
+            words(format!("on {}", breakable(view.building.walls.get(wall).map_or("", |w| w.name.as_str()))))
+        }
+        Carrier::Beam { beam, .. } => {
+            super::text::to(keys::beam(beam), format!("on {}", breakable(view.mark(beam))))
+        }
     }
 }

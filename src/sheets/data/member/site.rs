@@ -6,8 +6,8 @@ use sagledger_calc::workings::decimal::{self, Decimal};
 use sagledger_calc::workings::unit::Unit;
 
 use super::{Labelled, on_label};
-use crate::data::text::{Run, Runs, sheet, to, value, words};
 use crate::data::text::keys;
+use crate::data::text::{Run, Runs, sheet, to, value, words};
 use crate::data::view::{View, along};
 
 pub(super) fn items(view: View, beam: &Beam, result: &BeamResult) -> Vec<Labelled> {

@@ -65,7 +65,14 @@ pub fn area(build_up: usize, width: f64, from: f64, to: f64) -> Load {
     Load::Area { build_up, width: (m(width), m(width)), from: m(from), to: m(to) }
 }
 
-pub fn beam(mark: &str, title: &str, section: &str, length: f64, bearings: Vec<Bearing>, loads: Vec<LoadRow>) -> Beam {
+pub fn beam(
+    mark: &str,
+    title: &str,
+    section: &str,
+    length: f64,
+    bearings: Vec<Bearing>,
+    loads: Vec<LoadRow>,
+) -> Beam {
     Beam {
         mark: mark.into(),
         title: Some(title.into()),
