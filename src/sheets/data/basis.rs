@@ -13,7 +13,7 @@ use sagledger_calc::workings::decimal;
 use sagledger_calc::workings::unit::Unit;
 use serde::Serialize;
 
-use super::text::{Run, Runs, breakable, keys, symbol, value, words};
+use super::text::{Run, Runs, breakable, keys, sentence, symbol, value, words};
 use super::view::{View, limit_words};
 use crate::package::Package;
 
@@ -40,7 +40,7 @@ struct LimitRow {
 struct Assumption {
     key: String,
     number: usize,
-    sentence: String,
+    sentence: Runs,
     /// Who relies on it; none where every sheet does.
     beside: Option<Run>,
 }
@@ -208,7 +208,7 @@ fn assumptions(view: View) -> Vec<Assumption> {
             Assumption {
                 key: keys::assumption(n + 1),
                 number: n + 1,
-                sentence: assumption.sentence.clone(),
+                sentence: sentence(&assumption.sentence),
                 beside: (!sheets.is_empty()).then_some(Run::Sheets { sheets }),
             }
         })

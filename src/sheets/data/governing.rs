@@ -1,11 +1,10 @@
 //! Every check of every member in one table.
 
 use sagledger_calc::checks::places;
-use sagledger_calc::results::Verdict as Word;
 use serde::Serialize;
 
 use super::text::{breakable, keys};
-use super::view::{Verdict, View, short_clause, verdict};
+use super::view::{Verdict, View, clause, verdict};
 
 #[derive(Debug, Serialize)]
 pub(super) struct Governing {
@@ -42,10 +41,7 @@ pub(super) fn governing(view: View) -> Governing {
                 place: places::place(result, check),
                 combination: view.short_combination(check),
                 verdict: verdict(check),
-                clause: match (&check.verdict, &check.reason) {
-                    (Word::NotVerified, Some(reason)) => reason.clone(),
-                    _ => short_clause(&check.clause),
-                },
+                clause: clause(check),
                 sheet: keys::beam_checks(index),
                 closest: closest.is_some_and(|c| std::ptr::eq(c, check)),
             });

@@ -7,7 +7,7 @@ use sagledger_calc::workings::unit::Unit;
 use serde::Serialize;
 
 use super::text::{Runs, keys, listed, words};
-use super::view::View;
+use super::view::{View, compact};
 
 #[derive(Debug, Serialize)]
 pub(super) struct Loads {
@@ -82,8 +82,8 @@ fn table(view: View, index: usize, build_up: &BuildUp) -> BuildUpTable {
             Some(partitions) => {
                 let how = format!(
                     "{category}, {} + {} of partitions",
-                    kn_per_m2(imposed.load.si()),
-                    kn_per_m2(partitions.si())
+                    compact(imposed.load.si(), Unit::KnPerM2),
+                    compact(partitions.si(), Unit::KnPerM2)
                 );
                 totals.push(row("imposed, on plan", how, imposed.load.si() + partitions.si()));
             }
@@ -116,9 +116,7 @@ fn carried_by(view: View, index: usize) -> Runs {
         .map(|(index, ..)| view.link(index))
         .collect();
     if beams.is_empty() {
-        return vec![words("on no member")];
+        return vec![words("no member")];
     }
-    let mut runs = vec![words("on ")];
-    runs.extend(listed(beams));
-    runs
+    listed(beams)
 }

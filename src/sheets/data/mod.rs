@@ -97,7 +97,9 @@ pub(crate) fn document(package: &Package) -> Document {
     let paper = package.meta.drawing_sheets;
     let stacks: Vec<Stack> = results.chains.iter().map(|chain| Stack::of(building, results, chain)).collect();
 
-    let picture = stacks.first().and_then(Stack::cover).map(json);
+    // The cover shows the longest chain.
+    let longest = results.chains.iter().zip(&stacks).rev().max_by_key(|(chain, _)| chain.beams.len());
+    let picture = longest.and_then(|(_, stack)| stack.cover()).map(json);
     let mut parts =
         vec![Part::Cover(Box::new(cover::cover(package, view, picture))), Part::Basis(basis::basis(package, view))];
     parts.extend(loads::loads(view).map(Part::Loads));

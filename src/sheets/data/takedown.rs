@@ -6,13 +6,13 @@ use sagledger_calc::building::{Beam, Carrier, Load};
 use sagledger_calc::checks::places;
 use sagledger_calc::quantity::Force;
 use sagledger_calc::results::{BeamResult, RowResult};
-use sagledger_calc::workings::decimal::{self, Decimal};
+use sagledger_calc::workings::decimal;
 use sagledger_calc::workings::unit::Unit;
 use serde::Serialize;
 use serde_json::Value;
 
 use super::text::{Runs, breakable, keys, to, words};
-use super::view::{View, along, kn, of};
+use super::view::{View, along, compact, kn, of};
 use crate::package::Paper;
 
 #[derive(Debug, Serialize)]
@@ -59,7 +59,7 @@ pub(super) fn load_path(view: View, paper: Paper, drawings: Vec<Value>) -> LoadP
 fn table(view: View, actions: &[Action]) -> Table {
     let groups = view
         .beams()
-        .map(|(index, beam, result)| Group { mark: beam.mark.clone(), rows: rows(view, actions, beam, result) })
+        .map(|(_, beam, result)| Group { mark: beam.mark.clone(), rows: rows(view, actions, beam, result) })
         .collect();
     let totals = &view.results.takedown;
     let figures = |list: &[(Action, Force)]| actions.iter().map(|&a| kn(of(list, a))).collect::<Vec<_>>();
@@ -171,16 +171,5 @@ fn area_times_load(view: View, actions: &[Action], beam: &Beam, row: &RowResult)
             format!("{} m × {amounts}", along(to.si() - from.si()))
         }
         _ => String::new(),
-    }
-}
-
-/// As typed where that is short, else to three figures.
-fn compact(si: f64, unit: Unit) -> String {
-    match Decimal::as_typed(si, 4) {
-        Some(typed) => {
-            let typed = typed.moved(-unit.power()).without_trailing_zeros();
-            if typed.figures() <= 3 { typed.with_places(2).to_string() } else { decimal::three_figures(si, unit) }
-        }
-        None => decimal::three_figures(si, unit),
     }
 }

@@ -66,6 +66,15 @@ pub(crate) fn listed(items: Vec<Run>) -> Runs {
     runs
 }
 
+/// A sentence of the calculation: its symbols as symbols, its apostrophes as print has them.
+pub(crate) fn sentence(text: &str) -> Runs {
+    let text = text.replace('\'', "’");
+    match text.split_once("Q_k") {
+        Some((before, after)) => vec![words(before), symbol("Q_k"), words(after)],
+        None => vec![words(text)],
+    }
+}
+
 /// Numbers up to twelve as words, as running text has them.
 pub(crate) fn counted(n: usize) -> String {
     const WORDS: [&str; 13] =

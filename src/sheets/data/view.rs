@@ -6,7 +6,7 @@ use sagledger_calc::checks::account::closest;
 use sagledger_calc::checks::places;
 use sagledger_calc::limits::{Limit, LimitFrom, Movement};
 use sagledger_calc::quantity::Force;
-use sagledger_calc::results::{BeamResult, Check, CheckKind, CheckUnit, Results};
+use sagledger_calc::results::{BeamResult, Check, CheckKind, CheckUnit, Results, Verdict as Word};
 use sagledger_calc::workings::decimal;
 use sagledger_calc::workings::unit::Unit;
 use serde::Serialize;
@@ -93,8 +93,8 @@ pub(super) fn verdict(check: &Check) -> Verdict {
 pub(super) fn amount(check: &Check, si: Option<f64>) -> (String, &'static str) {
     let Some(si) = si else { return (String::new(), "") };
     match check.unit {
-        CheckUnit::Force => (decimal::three_figures(si, Unit::Kn), "kN"),
-        CheckUnit::Moment => (decimal::three_figures(si, Unit::Knm), "kNm"),
+        CheckUnit::Force => (three(si, Unit::Kn), "kN"),
+        CheckUnit::Moment => (three(si, Unit::Knm), "kNm"),
         CheckUnit::Length => (decimal::movement(si), "mm"),
         CheckUnit::Ratio if check.kind == CheckKind::Tilt => (decimal::one_in(si), ""),
         CheckUnit::Ratio => (decimal::utilisation(si), ""),
@@ -102,10 +102,23 @@ pub(super) fn amount(check: &Check, si: Option<f64>) -> (String, &'static str) {
 }
 
 /// "3-1-1 6.2.5": the clause column has no room for the words that all its rows share.
-pub(super) fn short_clause(clause: &str) -> String {
-    match clause.strip_prefix("EN 199") {
-        Some(rest) => rest.to_string(),
+fn short_clause(clause: &str) -> String {
+    match clause.strip_prefix("EN 1993-") {
+        Some(rest) => format!("3-{rest}"),
         None => clause.to_string(),
+    }
+}
+
+/// What the clause column says: the clause or limit, the reason where a check is not verified, what else is required.
+pub(super) fn clause(check: &Check) -> String {
+    let clause = short_clause(&check.clause);
+    match (check.verdict, &check.reason) {
+        (Word::NotVerified, Some(reason)) if reason == check.kind.name() => {
+            format!("{clause}; not in this version")
+        }
+        (Word::NotVerified, Some(reason)) => reason.clone(),
+        (Word::NotMet, Some(reason)) => format!("{clause}; {reason}"),
+        _ => clause,
     }
 }
 
@@ -114,9 +127,23 @@ pub(super) fn of<T: Copy>(list: &[(Action, T)], action: Action) -> Option<T> {
     list.iter().find(|(a, _)| *a == action).map(|(_, value)| *value)
 }
 
-/// A force in kN to three figures; empty where the action brings none.
+/// A force in kN to three figures, never finer than 1 N; empty where the action brings none.
 pub(super) fn kn(force: Option<Force>) -> String {
-    force.map(|f| decimal::three_figures(f.si(), Unit::Kn)).unwrap_or_default()
+    let Some(newtons) = force.map(Force::si) else { return String::new() };
+    // What is left of nothing after a solve is nothing.
+    if newtons.abs() < 1e-3 { String::new() } else { three(newtons, Unit::Kn) }
+}
+
+/// Three figures, never finer than a thousandth of the unit; zero is plain.
+pub(super) fn three(si: f64, unit: Unit) -> String {
+    let size = si.abs() / unit.one();
+    if size == 0.0 {
+        "0".into()
+    } else if size < 0.1 {
+        decimal::places(si, 3, unit)
+    } else {
+        decimal::three_figures(si, unit)
+    }
 }
 
 /// A place along a beam in m, with its unit.
@@ -140,4 +167,15 @@ pub(super) fn limit_words(limit: &Limit) -> (String, String) {
         }
     }
     of(&limit.from, limit.movement)
+}
+
+/// A load as typed where that is short, else to three figures.
+pub(super) fn compact(si: f64, unit: Unit) -> String {
+    match decimal::Decimal::as_typed(si, 4) {
+        Some(typed) => {
+            let typed = typed.moved(-unit.power()).without_trailing_zeros();
+            if typed.figures() <= 3 { typed.with_places(2).to_string() } else { decimal::three_figures(si, unit) }
+        }
+        None => decimal::three_figures(si, unit),
+    }
 }

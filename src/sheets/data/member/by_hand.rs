@@ -38,16 +38,17 @@ pub(super) fn by_hand(_view: View, beam: &Beam, hand: &HandCheck) -> ByHand {
     let at = hand.at.si() - left;
     let span = hand.span.si();
     let pair = |moment: f64, own: f64| (decimal::places(moment, 2, Unit::Knm), decimal::places(own, 2, Unit::Mm));
+    let rows: Vec<Row> = hand.cases.iter().map(|case| row(case, at, span)).collect();
     ByHand {
         at: along_m(hand.at.si()),
-        rows: hand.cases.iter().map(|case| row(case, at, span)).collect(),
         by_hand: pair(hand.moment_by_hand.si(), hand.own_by_hand.si()),
         solved: pair(hand.moment_solved.si(), hand.own_solved.si()),
         difference: pair(
             hand.moment_by_hand.si() - hand.moment_solved.si(),
             hand.own_by_hand.si() - hand.own_solved.si(),
         ),
-        beside: beside(beam, hand, at, span),
+        beside: beside(beam, &rows, at, span),
+        rows,
     }
 }
 
@@ -98,29 +99,47 @@ fn row(case: &HandCase, at: f64, span: f64) -> Row {
     }
 }
 
-fn beside(beam: &Beam, _hand: &HandCheck, at: f64, span: f64) -> Runs {
+fn beside(beam: &Beam, rows: &[Row], at: f64, span: f64) -> Runs {
+    const EQUALS: &str = " =\u{a0}";
     let stiffness = E.si() * beam.section.i_y.si();
-    vec![
+    let mut runs = vec![
         words("Textbook cases on a simple span "),
         symbol("L"),
-        words(" = "),
+        words(EQUALS),
         value(along(span), "m"),
         words(", all at "),
         symbol("a"),
-        words(" = "),
+        words(EQUALS),
         value(along(at), "m"),
         words(" from its left end, with "),
         symbol("b"),
-        words(" = "),
+        words(EQUALS),
         value(along(span - at), "m"),
         words(" and "),
         symbol("EI"),
-        words(" = "),
+        words(EQUALS),
         value(decimal::places(stiffness, 0, Unit::Knm2), "kNm²"),
         words(". "),
-        symbol("c"),
-        words(
-            " is where a load or the centre of its part stands. Moments under the design loads, own deflection under the characteristic ones.",
-        ),
-    ]
+    ];
+    let has = |forms: &[&str]| rows.iter().any(|row| forms.contains(&row.form));
+    if has(&["point-left", "point-right"]) {
+        runs.extend([symbol("c"), words(" is where a point load stands. ")]);
+    }
+    if has(&["line-left", "line-right"]) {
+        runs.extend([symbol("W"), words(" is a load in all, "), symbol("c"), words(" where its centre stands. ")]);
+    }
+    if has(&["line"]) {
+        runs.extend([
+            symbol("R"),
+            words(" is the case’s own left reaction, "),
+            symbol("W"),
+            words(" its load left of "),
+            symbol("a"),
+            words(", "),
+            symbol("d"),
+            words(" the lever of that. "),
+        ]);
+    }
+    runs.push(words("Moments under the design loads, own deflection under the characteristic ones."));
+    runs
 }

@@ -2,13 +2,13 @@
 
 use sagledger_calc::building::Beam;
 use sagledger_calc::checks::places;
-use sagledger_calc::results::{BeamResult, Verdict as Word};
+use sagledger_calc::results::BeamResult;
 use sagledger_calc::workings::decimal;
 use sagledger_calc::workings::unit::Unit;
 use serde::Serialize;
 
 use crate::data::text::{Runs, breakable, value, words};
-use crate::data::view::{Verdict, View, amount, short_clause, verdict};
+use crate::data::view::{Verdict, View, amount, clause, verdict};
 
 #[derive(Debug, Serialize)]
 pub(super) struct Row {
@@ -27,11 +27,6 @@ pub(super) fn rows(view: View, index: usize, result: &BeamResult) -> Vec<Row> {
         .map(|check| {
             let (demand, unit) = amount(check, check.demand);
             let (limit, _) = amount(check, check.capacity);
-            let clause = match (&check.verdict, &check.reason) {
-                (Word::NotVerified, Some(reason)) => reason.clone(),
-                (Word::NotMet, Some(reason)) => format!("{}; {reason}", short_clause(&check.clause)),
-                _ => short_clause(&check.clause),
-            };
             Row {
                 name: breakable(&view.check_name(index, check)),
                 place: places::place(result, check),
@@ -39,7 +34,7 @@ pub(super) fn rows(view: View, index: usize, result: &BeamResult) -> Vec<Row> {
                 limit,
                 unit,
                 verdict: verdict(check),
-                clause,
+                clause: clause(check),
             }
         })
         .collect()

@@ -8,7 +8,7 @@ mod reactions;
 mod site;
 
 use sagledger_calc::building::{Beam, Carrier};
-use sagledger_calc::checks::account;
+use sagledger_calc::checks::{account, places};
 use sagledger_calc::limits::Movement;
 use sagledger_calc::results::{BeamResult, Check, CheckKind};
 use sagledger_calc::workings::decimal;
@@ -211,7 +211,7 @@ fn relies_on(view: View, beam: &Beam) -> Vec<Labelled> {
     let mut items: Vec<Labelled> = named
         .map(|(n, assumption)| Labelled {
             label: super::text::to(keys::assumption(n + 1), format!("Assumption {}", n + 1)),
-            body: vec![words(assumption.sentence.clone())],
+            body: super::text::sentence(&assumption.sentence),
             beside: None,
             plain: false,
         })
@@ -225,9 +225,13 @@ fn relies_on(view: View, beam: &Beam) -> Vec<Labelled> {
 /// What a bearing stands on as a label.
 fn on_label(view: View, on: Carrier) -> Run {
     match on {
+<<<<<<< HEAD
         Carrier::Wall(wall) => {
             words(format!("on {}", breakable(view.building.walls.get(wall).map_or("", |w| w.name.as_str()))))
         }
+=======
+        Carrier::Wall(_) => words(format!("on {}", breakable(&places::carrier(view.building, on)))),
+>>>>>>> d34c791081671aa168497b17ba2ffd3aa0dabb87
         Carrier::Beam { beam, .. } => {
             super::text::to(keys::beam(beam), format!("on {}", breakable(view.mark(beam))))
         }

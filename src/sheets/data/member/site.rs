@@ -24,7 +24,7 @@ pub(super) fn items(view: View, beam: &Beam, result: &BeamResult) -> Vec<Labelle
         match bearing.on {
             Carrier::Wall(_) => {
                 if let Some(length) = bearing.bearing_length {
-                    body.push(words("seat of "));
+                    body.push(words("Seat of "));
                     body.push(value(mm(length.si()), "mm"));
                     body.push(words(", "));
                 }
@@ -38,8 +38,8 @@ pub(super) fn items(view: View, beam: &Beam, result: &BeamResult) -> Vec<Labelle
             }
             Carrier::Beam { beam: carrier, lands } => {
                 let joint = match bearing.joint {
-                    Joint::OnTopFlange => "on its top flange",
-                    Joint::ToTheWeb => "to its web",
+                    Joint::OnTopFlange => "On its top flange",
+                    Joint::ToTheWeb => "To its web",
                 };
                 body.push(words(format!("{joint} at ")));
                 body.push(value(along(lands.si()), "m"));
@@ -69,16 +69,16 @@ pub(super) fn items(view: View, beam: &Beam, result: &BeamResult) -> Vec<Labelle
         let by = beam.restraint.by.as_ref().map(|by| format!(": {by}")).unwrap_or_default();
         match hold {
             FlangeHold::Ends => {}
-            FlangeHold::Continuous => item(words(name), vec![words(format!("held along its whole length{by}."))]),
+            FlangeHold::Continuous => item(words(name), vec![words(format!("Held along its whole length{by}."))]),
             FlangeHold::At(places) => {
                 let places: Vec<String> = places.iter().map(|p| along(p.si())).collect();
-                let text = format!("held at the bearings and at {} m{by}.", places.join(", "));
+                let text = format!("Held at the bearings and at {} m{by}.", places.join(", "));
                 item(words(name), vec![words(text)]);
             }
         }
     }
     if beam.existing {
-        item(words("existing"), vec![words("the beam stands already; nothing is ordered.")]);
+        item(words("existing"), vec![words("The beam stands already; nothing is ordered.")]);
     } else {
         let length = decimal::places(result.cut_length.si(), 3, Unit::M);
         let mass = decimal::three_figures(result.mass, Unit::One);
