@@ -225,13 +225,7 @@ fn relies_on(view: View, beam: &Beam) -> Vec<Labelled> {
 /// What a bearing stands on as a label.
 fn on_label(view: View, on: Carrier) -> Run {
     match on {
-<<<<<<< HEAD
-        Carrier::Wall(wall) => {
-            words(format!("on {}", breakable(view.building.walls.get(wall).map_or("", |w| w.name.as_str()))))
-        }
-=======
         Carrier::Wall(_) => words(format!("on {}", breakable(&places::carrier(view.building, on)))),
->>>>>>> d34c791081671aa168497b17ba2ffd3aa0dabb87
         Carrier::Beam { beam, .. } => {
             super::text::to(keys::beam(beam), format!("on {}", breakable(view.mark(beam))))
         }
