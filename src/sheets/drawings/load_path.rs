@@ -314,8 +314,8 @@ impl<'a> Sheet<'a> {
                 if let Some((x, y)) = landing.lower {
                     let mark = self.shown[landing.member].mark.clone();
                     // Above the arrow in two lines, else beside it in one.
-                    let upper = Text::centred(point(x, y - 10.2), words(format!("from {mark}")));
-                    let lower = Text::centred(point(x, y - 7.0), reaction.clone());
+                    let upper = Text::centred(point(x, y - 10.5), words(format!("from {mark}")));
+                    let lower = Text::centred(point(x, y - 7.4), reaction.clone());
                     if self.placer.is_free(&upper.rect()) && self.placer.is_free(&lower.rect()) {
                         for text in [upper, lower] {
                             self.placer.keep_off(text.rect());

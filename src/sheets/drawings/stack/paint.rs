@@ -188,7 +188,8 @@ impl Sheet<'_> {
         let beside = |y: f64| [left_of(x - 1.7, y), left_of(x - 3.2, y), right_of(x + 1.7, y)];
         let up = if down { -1.0 } else { 1.0 };
         let places = [middle(foot + 2.6 * up), middle(foot + 4.2 * up), middle(foot - 2.6 * up)];
-        let places: Vec<Place> = places.into_iter().flat_map(beside).collect();
+        let mut places: Vec<Place> = places.into_iter().flat_map(beside).collect();
+        places.extend([1.7, 2.6].map(|d| centred(x, if down { below(foot, d) } else { foot - d })));
         self.placer.place(&mut self.drawing, Size::Diagram, &total, places);
         let mut parts = vec![("own ", g.own, chord, foot)];
         if (g.inherited + g.settled).abs() > NOTHING {
