@@ -11,7 +11,7 @@ use std::path::Path;
 use std::time::Instant;
 
 use sagledger_calc::calculate;
-use sagledger_sheets::{Overrides, typeset};
+use sagledger_sheets::{Overrides, compile, source};
 
 fn main() {
     let folder = std::env::args().nth(1).unwrap_or_else(|| ".".into());
@@ -42,15 +42,24 @@ fn main() {
         };
         let mut package = support::package(&building, &results, support::meta(number, title));
         package.templates = Overrides(overrides.clone());
+        let files = source(&package).expect("the main file");
         let start = Instant::now();
-        match typeset(&package) {
-            Ok(done) => {
-                let took = start.elapsed();
-                for warning in &done.warnings {
-                    eprintln!("{name}: {warning:?}");
-                }
-                println!("{name}: {} sheets, {} kB, {took:?}", done.sheets, done.pdf.len() / 1024);
-                std::fs::write(format!("{folder}/{name}.pdf"), done.pdf).expect("the folder can be written to");
+        let compiled = match compile(&files) {
+            Ok(compiled) => compiled,
+            Err(fault) => {
+                eprintln!("{name}: {fault}");
+                continue;
+            }
+        };
+        let laid_out = start.elapsed();
+        for warning in &compiled.warnings {
+            eprintln!("{name}: {warning:?}");
+        }
+        match compiled.pdf(number, "preview") {
+            Ok(pdf) => {
+                let sheets = compiled.document.pages().len();
+                println!("{name}: {sheets} sheets, {} kB, {laid_out:?} of {:?}", pdf.len() / 1024, start.elapsed());
+                std::fs::write(format!("{folder}/{name}.pdf"), pdf).expect("the folder can be written to");
             }
             Err(fault) => eprintln!("{name}: {fault}"),
         }

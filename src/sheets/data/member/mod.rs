@@ -6,6 +6,7 @@ mod loads;
 mod properties;
 mod reactions;
 mod site;
+mod workings;
 
 use sagledger_calc::building::{Beam, Carrier};
 use sagledger_calc::checks::{account, places};
@@ -18,7 +19,6 @@ use serde_json::Value;
 
 use super::text::{Run, Runs, breakable, counted, keys, listed, value, words};
 use super::view::{View, along, along_m};
-use crate::writers;
 
 #[derive(Debug, Serialize)]
 pub(super) struct Member {
@@ -92,7 +92,7 @@ pub(super) fn member(view: View, index: usize, beam: &Beam, result: &BeamResult,
         diagrams: drawings.diagrams,
         checks: checks::rows(view, index, result),
         check_notes: checks::notes(view, beam, result),
-        workings: writers::json::account(&account),
+        workings: workings::workings(&account),
         by_hand: result.hand_check.as_ref().map(|hand| by_hand::by_hand(view, beam, hand)),
         relies_on: relies_on(view, beam),
         site: site::items(view, beam, result),
