@@ -19,7 +19,7 @@ pub enum Required {
 const OWN_KINDS: [&str; 3] = ["total", "after", "variable"];
 
 /// For a beam on two bearings, whose own movement goes with 1 / I: the greatest of I delta / delta_lim and, where the
-/// stacked movement is closest to its limit, of I own / (limit - inherited - settled).
+/// stacked movement of each stretch is closest to its limit, of I own / (limit - inherited - settled).
 pub fn of_simple(building: &Building, beam: usize) -> Required {
     let provided = building.job.beams[beam].shape.second_moment;
     let whole = [0.0, building.length(beam)];
@@ -29,7 +29,16 @@ pub fn of_simple(building: &Building, beam: usize) -> Required {
             most = most.max(provided * found.movement / found.limit);
         }
     }
-    if let Some(Governing { movement, limit, at, sign, .. }) = governing(building, beam, "stacked", whole) {
+    // Each span and overhang at its own governing point: a second moment that leaves another stretch over its limit
+    // would not be what is required.
+    for (from, to, ..) in building.limited(beam, "stacked") {
+        let Some(Governing { movement, limit, at, sign, .. }) = governing(building, beam, "stacked", [from, to])
+        else {
+            continue;
+        };
+        if movement == 0.0 {
+            continue;
+        }
         let parts = inherited_and_settled(building, beam, (sign * movement, at));
         let supports = sign * (parts[0].0 + parts[0].1);
         let own = movement - supports;

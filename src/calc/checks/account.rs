@@ -6,11 +6,11 @@ use super::combined::{Combined, Writing, signed};
 use super::places::{carrier, heading};
 use super::workings;
 use crate::building::Building;
-use crate::results::{BeamResult, Check, CheckKind, Combinations, Results, Verdict};
+use crate::results::{BeamResult, Check, CheckKind, Combinations, Place, Results, Verdict};
 use crate::workings::account::Account;
 use crate::workings::{Tape, glossary};
 
-/// The workings of a beam: of each kind of check the worst entry, of webs every place, then the reactions.
+/// The workings of a beam: of each kind of check the worst entry, then the reactions.
 /// Empty where there is no such beam.
 pub fn account(building: &Building, results: &Results, beam: usize) -> Account {
     let tape = Tape::new();
@@ -32,25 +32,25 @@ pub fn account(building: &Building, results: &Results, beam: usize) -> Account {
     Account::of(&tape)
 }
 
-/// The checks whose workings are shown, in the order of their names; webs place by place.
+/// The checks whose workings are shown, in the order of their names: of each kind the worst.
 pub fn shown(own: &BeamResult) -> Vec<&Check> {
     let mut shown = Vec::new();
     for kind in CheckKind::ALL {
         let of_kind = own.checks.iter().filter(|c| c.kind == kind && !c.advice);
         match kind {
-            // A web's force alone, then with the moment at the same place, which goes on from it.
+            // The web that is worst under its force alone, and the one that is worst with the moment beside it: each
+            // alone first, then with the moment at the same place, which goes on from it.
             CheckKind::WebUnderForce => {
-                for alone in of_kind {
-                    let with_moment = |c: &&Check| c.kind == CheckKind::WebWithBending && c.place == alone.place;
-                    shown.push(alone);
-                    shown.extend(own.checks.iter().filter(with_moment));
+                let with_moment = || own.checks.iter().filter(|c| c.kind == CheckKind::WebWithBending);
+                let worst = [of_kind.clone().reduce(worse), with_moment().reduce(worse)];
+                let mut places: Vec<Place> = worst.into_iter().flatten().map(|c| c.place).collect();
+                places.dedup();
+                for place in places {
+                    shown.extend(of_kind.clone().filter(|c| c.place == place));
+                    shown.extend(with_moment().filter(|c| c.place == place));
                 }
             }
-            CheckKind::WebWithBending => {
-                let alone =
-                    |place| own.checks.iter().any(|c| c.kind == CheckKind::WebUnderForce && c.place == place);
-                shown.extend(of_kind.filter(|c| !alone(c.place)));
-            }
+            CheckKind::WebWithBending => {}
             CheckKind::Torsion => shown.extend(of_kind),
             CheckKind::Bending
             | CheckKind::Shear

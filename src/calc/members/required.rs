@@ -12,7 +12,7 @@ use crate::results::{Stretch, StretchKind};
 /// How closely a utilisation of 1 is met.
 const TOLERANCE: f64 = 1e-12;
 /// Second moments looked at, as multiples of the one in hand.
-const LEAST: f64 = 1e-4;
+const LEAST: f64 = 1e-12;
 const GREATEST: f64 = 1e6;
 
 /// The length that a movement may reach in a stretch; none where nothing limits it.

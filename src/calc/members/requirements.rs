@@ -5,8 +5,8 @@ use super::interaction::worst_place;
 use super::movements::{chord_movements, in_stretch, parts_under, stacked, stretch_at, tilt};
 use super::required::{allowed, beside, resolved};
 use super::{MovementFields, Sets};
+use crate::analysis::contribution::Contribution;
 use crate::analysis::envelope::{Found, Sense};
-use crate::analysis::loads::Shape;
 use crate::analysis::solved::Solved;
 use crate::building::{Carrier, FlangeHold, Joint, Load};
 use crate::checks::bending::Bending;
@@ -46,6 +46,12 @@ pub struct Requirements {
     pub tilts: Vec<Tilt>,
     pub second_moment: RequiredSecondMoment,
 }
+
+/// Places nearer than this are one, m.
+const SAME_PLACE: f64 = 1e-9;
+
+/// Place along the beam, where that is, the force by contribution, and over which length it arrives.
+type FromAbove = (Length, Place, Vec<(usize, f64)>, StiffLength);
 
 struct Collect<'c> {
     solved: &'c Solved<'c>,
@@ -213,30 +219,9 @@ impl Collect<'_> {
                 forces.push((seat.at, place, bearing.design_max.clone(), way, stiff));
             }
         }
-        for (n, landing) in solved.layout.landings[solved.members[local]].iter().enumerate() {
-            let other = &solved.building.beams[landing.beam];
-            if other.bearings[landing.bearing].joint == Joint::ToTheWeb {
-                continue;
-            }
-            let Some(other_local) = solved.local(landing.beam) else { continue };
-            let values = solved.reaction(other_local, landing.bearing);
-            let force = scalar::<1, 0>(solved, values, &[self.sets.strength()], Sense::Greatest);
-            if let Some(force) = force {
-                let stiff = crossing(solved, landing.beam);
-                forces.push((landing.at, Place::Landing { index: n }, force, Way::Within, stiff));
-            }
-        }
-        for (row, load) in beam.loads.iter().enumerate() {
-            let Load::Point { at, .. } = load.load else { continue };
-            let values = solved.contributions.iter().enumerate().filter(|(_, c)| {
-                c.beam == solved.members[local]
-                    && c.row == Some(row)
-                    && matches!(solved.units[c.unit].shape, Shape::Point { .. })
-            });
-            let values = values.map(|(n, c)| (n, c.amount)).collect();
-            let force = scalar::<1, 0>(solved, values, &[self.sets.strength()], Sense::Greatest);
-            if let Some(force) = force {
-                forces.push((at, Place::Load { row: row + 1 }, force, Way::Within, StiffLength::Unknown));
+        for (at, place, values, stiff) in self.from_above() {
+            if let Some(force) = scalar::<1, 0>(solved, values, &[self.sets.strength()], Sense::Greatest) {
+                forces.push((at, place, force, Way::Within, stiff));
             }
         }
         forces.sort_by(|a, b| a.0.si().total_cmp(&b.0.si()));
@@ -253,6 +238,47 @@ impl Collect<'_> {
                 self.push(CheckKind::WebWithBending, place, at, how(&force), inputs);
             }
         }
+    }
+
+    /// Forces that come in through the top flange: point loads and beams that land on it. Those at one place act
+    /// together, over the least of their stiff lengths.
+    fn from_above(&self) -> Vec<FromAbove> {
+        let (solved, local) = (self.solved, self.local);
+        let index = solved.members[local];
+        let mut together: Vec<FromAbove> = Vec::new();
+        let mut add = |at: Length, place, values: Vec<(usize, f64)>, stiff: StiffLength| match together
+            .iter_mut()
+            .find(|other| (other.0.si() - at.si()).abs() <= SAME_PLACE)
+        {
+            Some((_, _, sum, least)) => {
+                for (c, value) in values {
+                    match sum.iter_mut().find(|(n, _)| *n == c) {
+                        Some((_, of)) => *of += value,
+                        None => sum.push((c, value)),
+                    }
+                }
+                if stiff_size(&stiff) < stiff_size(least) {
+                    *least = stiff;
+                }
+            }
+            None => together.push((at, place, values, stiff)),
+        };
+        for (n, landing) in solved.layout.landings[index].iter().enumerate() {
+            let joint = solved.building.beams[landing.beam].bearings[landing.bearing].joint;
+            if joint == Joint::OnTopFlange
+                && let Some(other) = solved.local(landing.beam)
+            {
+                let values = solved.reaction(other, landing.bearing);
+                add(landing.at, Place::Landing { index: n }, values, crossing(solved, landing.beam));
+            }
+        }
+        for (row, load) in solved.beam(local).loads.iter().enumerate() {
+            let Load::Point { at, .. } = load.load else { continue };
+            let own = |(_, c): &(usize, &Contribution)| c.beam == index && c.row == Some(row);
+            let values = solved.contributions.iter().enumerate().filter(own).map(|(n, c)| (n, c.amount));
+            add(at, Place::Load { row: row + 1 }, values.collect(), StiffLength::Unknown);
+        }
+        together
     }
 
     fn uplift(&mut self) {

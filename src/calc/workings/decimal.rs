@@ -200,8 +200,12 @@ impl fmt::Display for Decimal {
     }
 }
 
-/// Three significant figures in `unit`, as tables and text print most figures: "54.2". Not finite: "none".
+/// Three significant figures in `unit`, as tables and text print most figures: "54.2"; nothing at all is "0". Not
+/// finite: "none".
 pub fn three_figures(si: f64, unit: Unit) -> String {
+    if si == 0.0 {
+        return "0".into();
+    }
     text(Decimal::rounded(si, Rounding::Significant(3), unit))
 }
 

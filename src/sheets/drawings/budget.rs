@@ -15,9 +15,12 @@ const LENGTH: f64 = 111.0;
 const BAR: f64 = 3.2;
 const PITCH: f64 = 10.5;
 /// Bars on one drawing.
-const BARS: usize = 20;
+const BARS: usize = 16;
+/// Parts that would print as 0.0 mm are left out, m.
+const LEAST: f64 = 0.05e-3;
 
-/// How a beam's part is filled, in order of the chain; later ones stay white and are named under their bars.
+/// How a beam's part is filled, by its level in the chain; lower levels than these stay white. A level of several
+/// beams, and a white one, is named under its part.
 #[derive(Clone, Copy, PartialEq)]
 enum Ink {
     Solid,
@@ -33,17 +36,26 @@ const INKS: [Ink; 4] = [Ink::Solid, Ink::Tint25, Ink::Hatch, Ink::Tint10];
 #[derive(Clone, Debug, PartialEq)]
 pub struct Budget {
     pub mark: String,
-    /// (which beam of the chain, its mark, what its bending adds at the governing point).
-    pub shares: Vec<(usize, String, f64)>,
+    /// The bar's own beam first.
+    pub shares: Vec<Share>,
     pub settled: f64,
     pub total: f64,
     pub limit: Option<f64>,
 }
 
+/// What one beam's bending adds at the governing point.
+#[derive(Clone, Debug, PartialEq)]
+pub struct Share {
+    pub mark: String,
+    /// Distance of the beam from the top of the chain.
+    pub level: usize,
+    pub movement: f64,
+}
+
 /// The bars of a chain, on as many drawings as they need.
 pub fn budget_bars(building: &Building, results: &Results, chain: &Chain) -> Vec<Drawing> {
     let mark = |beam: usize| building.beams.get(beam).map_or_else(String::new, |b| b.mark.clone());
-    let order = |beam: usize| chain.beams.iter().position(|b| *b == beam).unwrap_or(usize::MAX);
+    let level = |beam: usize| results.beams.get(beam).map_or(0, |b| b.level);
     let bars = chain.beams.iter().filter_map(|beam| {
         let movements = &results.beams.get(*beam)?.movements;
         let stacked = movements.governing.as_ref().unwrap_or(&movements.stacked);
@@ -51,44 +63,50 @@ pub fn budget_bars(building: &Building, results: &Results, chain: &Chain) -> Vec
         let sign = if stacked.total.value.si() < 0.0 { -1.0 } else { 1.0 };
         Some(Budget {
             mark: mark(*beam),
-            shares: stacked.shares.iter().map(|(b, m)| (order(*b), mark(*b), sign * m.si())).collect(),
+            shares: stacked
+                .shares
+                .iter()
+                .map(|(b, m)| Share { mark: mark(*b), level: level(*b), movement: sign * m.si() })
+                .collect(),
             settled: sign * stacked.settled.si(),
             total: sign * stacked.total.value.si(),
             limit: stacked.limit.map(|l| l.si()),
         })
     });
-    drawings(&bars.collect::<Vec<_>>(), &chain.beams.iter().map(|b| mark(*b)).collect::<Vec<_>>())
+    drawings(&bars.collect::<Vec<_>>())
 }
 
-/// `marks` are the chain's beams in order; the first ones have a fill of their own.
-pub fn drawings(bars: &[Budget], marks: &[String]) -> Vec<Drawing> {
+/// The bars as drawings.
+pub fn drawings(bars: &[Budget]) -> Vec<Drawing> {
     let longest = bars.iter().flat_map(|b| {
-        let parts = b.shares.iter().map(|s| s.2).chain([b.settled]).filter(|p| *p > 0.0).sum::<f64>();
+        let parts = b.shares.iter().map(|s| s.movement).chain([b.settled]).filter(|p| *p > 0.0).sum::<f64>();
         [parts * 1e3, b.total * 1e3, b.limit.unwrap_or(0.0) * 1e3]
     });
     let longest = longest.fold(0.0, f64::max);
     let scales = [20.0, 15.0, 10.0, 8.0, 6.0, 5.0, 4.5, 4.0, 3.5, 3.0, 2.5, 2.0, 1.5, 1.0, 0.5, 0.2, 0.1, 0.05];
     let scale = scales.into_iter().find(|s| s * longest <= LENGTH).unwrap_or(0.02);
-    bars.chunks(BARS).map(|part| one(part, marks, scale)).collect()
+    bars.chunks(BARS).map(|part| one(part, scale)).collect()
 }
 
-fn one(bars: &[Budget], marks: &[String], scale: f64) -> Drawing {
-    let height = PITCH * bars.len() as f64 + 3.0;
+fn one(bars: &[Budget], scale: f64) -> Drawing {
+    let height = (PITCH + 3.0) * bars.len() as f64 + 3.0;
     let mut drawing = Drawing::new("budget-bars", WIDE, height);
     let mut placer = Placer::new(Rect::new(0.0, 0.0, 122.0, height));
     let widest = bars.iter().map(|b| letters::width(&[run(Face::SemiBold, b.mark.as_str())], Size::Diagram));
     // Long marks stand above their bars.
     let above = widest.fold(0.0, f64::max) > LEFT - 1.0;
     let lift = if above { 2.9 } else { 0.0 };
+    let pitch = PITCH + lift;
+    let levels = levels(bars);
     for (n, bar) in bars.iter().enumerate() {
-        let top = PITCH * n as f64 + lift;
+        let top = pitch * n as f64 + lift;
         let at = if above { point(LEFT, top - 0.8) } else { point(0.0, top + BAR / 2.0 + 0.93) };
         placer.keep_off(drawing.text(at, Align::Left, Size::Diagram, vec![run(Face::SemiBold, bar.mark.as_str())]));
-        parts(&mut drawing, &mut placer, bar, top, scale);
+        parts(&mut drawing, &mut placer, bar, &levels, top, scale);
     }
-    let foot = PITCH * bars.len() as f64 + lift + 1.6;
+    let foot = pitch * bars.len() as f64 + 1.6;
     drawing.height = foot + 1.4;
-    legend(&mut drawing, bars, marks, foot);
+    legend(&mut drawing, &levels, foot);
     let mut column = Column::new();
     let size = if scale == 1.0 { "full size".to_string() } else { format!("{scale} times full size") };
     let text = format!("Governing point of each beam, {size}, in mm. What is not used is left open.");
@@ -99,7 +117,21 @@ fn one(bars: &[Budget], marks: &[String], scale: f64) -> Drawing {
     drawing
 }
 
-fn parts(drawing: &mut Drawing, placer: &mut Placer, bar: &Budget, top: f64, scale: f64) {
+/// The beams of each level that take part in some bar.
+fn levels(bars: &[Budget]) -> Vec<Vec<String>> {
+    let mut levels: Vec<Vec<String>> = Vec::new();
+    for share in bars.iter().flat_map(|b| &b.shares).filter(|s| s.movement.abs() >= LEAST) {
+        if levels.len() <= share.level {
+            levels.resize(share.level + 1, vec![]);
+        }
+        if !levels[share.level].contains(&share.mark) {
+            levels[share.level].push(share.mark.clone());
+        }
+    }
+    levels
+}
+
+fn parts(drawing: &mut Drawing, placer: &mut Placer, bar: &Budget, levels: &[Vec<String>], top: f64, scale: f64) {
     let foot = top + BAR;
     let mut x = LEFT;
     let mut figures: Vec<(f64, Vec<Run>)> = Vec::new();
@@ -108,24 +140,20 @@ fn parts(drawing: &mut Drawing, placer: &mut Placer, bar: &Budget, top: f64, sca
         let figure = run(Face::SemiBold, tenth(movement * 1e3));
         if name { vec![run(Face::Regular, format!("{mark} ")), figure] } else { vec![figure] }
     };
-    let settled = [(usize::MAX, "settled".to_string(), bar.settled)];
-    for (order, mark, movement) in bar.shares.iter().chain(&settled) {
-        let width = movement * 1e3 * scale;
-        if movement.abs() < 0.05e-3 {
+    let settled = Share { mark: "settled".to_string(), level: usize::MAX, movement: bar.settled };
+    for share in bar.shares.iter().chain([&settled]).filter(|s| s.movement.abs() >= LEAST) {
+        let width = share.movement * 1e3 * scale;
+        if share.movement < 0.0 {
+            less.extend(named(&format!(" {}", share.mark), -share.movement, true));
             continue;
         }
-        if *movement < 0.0 {
-            less.extend(named(&format!(" {mark}"), *movement, true));
-            continue;
-        }
-        let ink = INKS.get(*order).copied().unwrap_or(Ink::White);
-        let rect = Rect::new(x, top, x + width, foot);
-        fill(drawing, rect, ink);
-        figures.push((x, named(mark, *movement, ink == Ink::White)));
+        let ink = INKS.get(share.level).copied().unwrap_or(Ink::White);
+        let several = levels.get(share.level).is_some_and(|l| l.len() > 1) && share.mark != bar.mark;
+        fill(drawing, Rect::new(x, top, x + width, foot), ink);
+        figures.push((x, named(&share.mark, share.movement, ink == Ink::White || several)));
         x += width;
     }
     let end = LEFT + bar.total.max(0.0) * 1e3 * scale;
-    let y = foot + 2.0;
     if let Some(limit) = bar.limit {
         let at = LEFT + limit * 1e3 * scale;
         let tick = Path::line(point(at, top - 1.0), point(at, foot + 1.0));
@@ -135,10 +163,9 @@ fn parts(drawing: &mut Drawing, placer: &mut Placer, bar: &Budget, top: f64, sca
             drawing.stroke(Line::Left, Path::line(point(end.max(x), middle), point(at, middle)));
         }
         let runs = words(tenth(limit * 1e3));
-        let under = below(foot, 1.0);
+        let under = below(foot, 1.4);
         let places = [left_of(at, under), right_of(at + 0.8, under), right_of(at + 1.2, top + 2.6)];
         placer.place(drawing, Size::Diagram, &runs, places);
-        let _ = y;
         let (word, rest) =
             if limit >= bar.total { ("left ", limit - bar.total) } else { ("over ", bar.total - limit) };
         let runs = vec![run(Face::Regular, word), run(Face::SemiBold, tenth(rest * 1e3))];
@@ -146,11 +173,11 @@ fn parts(drawing: &mut Drawing, placer: &mut Placer, bar: &Budget, top: f64, sca
             under_start(drawing, placer, &figure, x, under);
         }
         let start = end.max(x) + 1.2;
-        let places = (0..12).map(|n| right_of(start + f64::from(n), under)).chain([right_of(at + 8.0, under)]);
-        let inline = [right_of(at + 1.4, top + 2.6), left_of(at - 1.4, under + 2.9)];
-        placer.place(drawing, Size::Diagram, &runs, places.chain(inline));
+        let places = (0..3).map(|n| right_of(start + f64::from(n), under));
+        let beyond = (0..8).map(|n| right_of(end.max(x).max(at) + 1.4 + f64::from(n), top + 2.6));
+        placer.place(drawing, Size::Diagram, &runs, places.chain(beyond));
     } else {
-        let under = below(foot, 1.0);
+        let under = below(foot, 1.4);
         for (x, figure) in figures {
             under_start(drawing, placer, &figure, x, under);
         }
@@ -159,7 +186,7 @@ fn parts(drawing: &mut Drawing, placer: &mut Placer, bar: &Budget, top: f64, sca
     }
     if !less.is_empty() {
         less.insert(0, run(Face::Regular, "less"));
-        let places = (0..30).map(|n| right_of(LEFT + 4.0 * f64::from(n), below(foot, 1.0)));
+        let places = (0..30).map(|n| right_of(LEFT + 4.0 * f64::from(n), below(foot, 1.4)));
         placer.place(drawing, Size::Diagram, &less, places);
     }
 }
@@ -203,29 +230,34 @@ fn hatch(rect: Rect) -> Vec<Path> {
 }
 
 /// "Solid: B1 bends." and so on, for the fills that are used.
-fn legend(drawing: &mut Drawing, bars: &[Budget], marks: &[String], y: f64) {
-    let names = ["Solid", "Grey", "Hatched", "Light grey"];
+fn legend(drawing: &mut Drawing, levels: &[Vec<String>], y: f64) {
+    let names = ["Solid", "Grey", "Hatched", "Light grey", "White"];
     let mut x = 0.0;
     let mut y = y + 1.0;
-    for (n, name) in names.iter().enumerate() {
-        let used = bars.iter().any(|b| b.shares.iter().any(|s| s.0 == n && s.2.abs() >= 0.05e-3));
-        let Some(mark) = marks.get(n).filter(|_| used) else { continue };
-        let runs = words(format!("{name}: {mark} bends."));
-        let width = letters::width(&runs, Size::Diagram);
-        if x + width > 120.0 && x > 0.0 {
-            x = 0.0;
-            y += 3.6;
+    for (name, marks) in names.iter().zip(levels).filter(|(_, marks)| !marks.is_empty()) {
+        let (verb, more) = (if marks.len() == 1 { "bends" } else { "bend" }, marks.len().saturating_sub(6));
+        let mut shown: Vec<String> = marks.iter().take(6).cloned().collect();
+        if more > 0 {
+            shown.push(format!("{more} more"));
         }
-        drawing.text(point(x, y), Align::Left, Size::Diagram, runs);
-        x += width + 5.0;
+        let text = format!("{name}: {} {verb}.", listed(shown.into_iter()));
+        for line in letters::wrapped(Face::Regular, &text, Size::Diagram, 120.0) {
+            let width = letters::width(&words(line.as_str()), Size::Diagram);
+            if x + width > 120.0 && x > 0.0 {
+                x = 0.0;
+                y += 3.6;
+            }
+            drawing.text(point(x, y), Align::Left, Size::Diagram, words(line));
+            x += width + 5.0;
+        }
     }
     drawing.height = drawing.height.max(y + 1.2);
 }
 
 fn alt(bars: &[Budget]) -> String {
     let told = bars.iter().map(|bar| {
-        let parts = bar.shares.iter().filter(|s| s.2.abs() >= 0.05e-3);
-        let parts = listed(parts.map(|(_, mark, m)| format!("{} mm from {mark}", tenth(m * 1e3))));
+        let parts = bar.shares.iter().filter(|s| s.movement.abs() >= LEAST);
+        let parts = listed(parts.map(|s| format!("{} mm from {}", tenth(s.movement * 1e3), s.mark)));
         let settled = match tenth(bar.settled * 1e3) {
             t if super::figures::is_zero(&t) => String::new(),
             t => format!(", {t} mm settled"),

@@ -15,8 +15,8 @@ pub const CAPITALS: f64 = 0.698;
 
 /// mm in a typographic point.
 const POINT: f64 = 25.4 / 72.0;
-/// A unit after a value is a little smaller than the value.
-const UNIT_SCALE: f64 = 0.86;
+/// A unit after a value is a little smaller than the value, down to the least size there is.
+const UNIT_SCALE: f64 = 7.2 / 7.6;
 const SUBSCRIPT_SCALE: f64 = 0.72;
 
 /// How a run of text is set.

@@ -8,7 +8,7 @@ use super::figures::{fixed, place, three};
 use super::labels::{Column, Place, Placer, WIDE, centred, left_of, right_of, sideways};
 use super::layout::{Layout, Member, Page, Paper, connected, lay_out, members};
 use super::letters::{self, Face, Run, run, words};
-use super::scene::{Drawing, Fill, Line, Path, Rect, Size, point};
+use super::scene::{Drawing, Fill, Line, Path, Rect, Size, Text, point};
 
 const PAPER: Paper =
     Paper { width: 113.0, rows: 9, gap: 13.0, clear: 2.8, scales: &[50.0, 100.0, 200.0, 500.0, 1000.0] };
@@ -253,8 +253,6 @@ impl<'a> Sheet<'a> {
         let mark = self.shown[member].mark.clone();
         let length = self.places[member].length;
         let Some(((left, y), (right, _))) = self.spot(member, 0.0).zip(self.spot(member, length)) else { return };
-        let runs = vec![run(Face::SemiBold, mark)];
-        let width = letters::width(&runs, Size::Diagram);
         let top = y - BAND.1 - 1.0;
         let reach = (right - left).max(4.0);
         let mut places: Vec<Place> =
@@ -265,8 +263,15 @@ impl<'a> Sheet<'a> {
             left_of(left - 1.2, y - 0.6),
             right_of(left + 0.6, y + 3.2),
         ]);
-        places.extend((1..12).map(|n| left_of(right - width * 0.1 * f64::from(n), y + 3.2)));
-        self.placer.place(&mut self.drawing, Size::Diagram, &runs, places);
+        places.extend((1..12).map(|n| left_of(right - 1.5 * f64::from(n), y + 3.2)));
+        for width in [80.0, 34.0, 22.0, 14.0, 8.0] {
+            let short = letters::shortened(Face::SemiBold, &mark, Size::Diagram, width);
+            let runs = vec![run(Face::SemiBold, short.as_str())];
+            if self.placer.place(&mut self.drawing, Size::Diagram, &runs, places.iter().copied()) {
+                return;
+            }
+        }
+        self.column.push(words(format!("{mark} is {} m long", fixed(length, 2))));
     }
 
     fn reaction(&self, member: usize, seat: usize) -> Vec<Run> {
@@ -307,7 +312,18 @@ impl<'a> Sheet<'a> {
                     }
                 }
                 if let Some((x, y)) = landing.lower {
-                    let mut from = words(format!("from {} ", self.shown[landing.member].mark));
+                    let mark = self.shown[landing.member].mark.clone();
+                    // Above the arrow in two lines, else beside it in one.
+                    let upper = Text::centred(point(x, y - 10.5), words(format!("from {mark}")));
+                    let lower = Text::centred(point(x, y - 7.4), reaction.clone());
+                    if self.placer.is_free(&upper.rect()) && self.placer.is_free(&lower.rect()) {
+                        for text in [upper, lower] {
+                            self.placer.keep_off(text.rect());
+                            self.drawing.texts.push(text);
+                        }
+                        return;
+                    }
+                    let mut from = words(format!("from {mark} "));
                     from.extend(reaction);
                     let places = [4.7, 6.3, 7.9, 9.5, 11.1]
                         .into_iter()

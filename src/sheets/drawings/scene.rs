@@ -285,6 +285,11 @@ pub struct Text {
 }
 
 impl Text {
+    /// A label of a diagram, centred.
+    pub fn centred(at: Point, runs: Vec<Run>) -> Text {
+        Text { at, align: Align::Center, size: Size::Diagram, runs, halo: None }
+    }
+
     /// The ink's box: from the ascenders to the descenders.
     pub fn rect(&self) -> Rect {
         let width = letters::width(&self.runs, self.size);

@@ -3,7 +3,7 @@
 use sagledger_calc::sections::Section;
 
 use super::figures::fixed;
-use super::letters::{Face, run, words};
+use super::letters::{self, Face, run, words};
 use super::scene::{Align, Drawing, Fill, Line, Path, Point, Rect, Size, Step, point};
 
 /// The drawing's paper: width, and height.
@@ -57,7 +57,8 @@ pub fn section_drawing(section: &Section) -> Drawing {
 
     // Depth at the left, its figure standing in the line; width below.
     let mm = |length: sagledger_calc::quantity::Length| fixed(length.to_mm(), 1);
-    let x = (left - 7.2).max(6.0);
+    let wide = letters::width(&words(mm(section.h)), Size::Diagram);
+    let x = left - over - 1.4 - wide / 2.0;
     let figure = drawing.text(point(x, middle + 0.95), Align::Center, Size::Diagram, words(mm(section.h)));
     dimension(&mut drawing, point(x, top), point(x, bottom), Some((figure.top - 0.6, figure.bottom + 0.6)));
     let y = bottom + 7.0;

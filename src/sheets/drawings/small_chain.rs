@@ -4,7 +4,7 @@ use sagledger_calc::building::Building;
 
 use super::diagrams::listed;
 use super::labels::{Placer, left_of, right_of};
-use super::layout::{Layout, Member, Paper, lay_out, members};
+use super::layout::{Layout, Member, Paper, lay_out, lay_out_in, members};
 use super::letters::{self, Face, run};
 use super::scene::{Drawing, Line, Path, Rect, Size, point};
 
@@ -42,12 +42,11 @@ fn lay_out_small(all: &[Member], chosen: &[usize]) -> Layout {
         let ends = l.pages.iter().flat_map(|p| &p.placed).map(|p| p.x + all[p.member].length * l.per_metre());
         ends.fold(0.0, f64::max)
     };
-    let mut layout = wide.clone();
     let mut scale = (right(&wide) * 1000.0 / PAPER.width).max(50.0);
+    let mut layout = wide;
     // Gaps between members do not shrink with the scale: a few rounds settle it.
     for _ in 0..4 {
-        let steps: [f64; 1] = [scale];
-        layout = lay_out_at(all, chosen, steps);
+        layout = lay_out_in(all, chosen, &Paper { width: 1e6, ..PAPER }, &[scale]);
         let over = right(&layout) / PAPER.width;
         if over <= 1.0 {
             break;
@@ -55,11 +54,6 @@ fn lay_out_small(all: &[Member], chosen: &[usize]) -> Layout {
         scale *= over * 1.02;
     }
     layout
-}
-
-fn lay_out_at(all: &[Member], chosen: &[usize], scales: [f64; 1]) -> Layout {
-    let kept: Vec<f64> = scales.to_vec();
-    super::layout::lay_out_in(all, chosen, &Paper { width: 1e6, ..PAPER }, &kept)
 }
 
 /// Whether every landing among the members shown is drawn.
@@ -104,7 +98,7 @@ fn neighbourhoods(all: &[Member], beam: usize) -> Vec<Vec<usize>> {
 
 fn drawn(all: &[Member], marks: &[&str], beam: usize, members: &[usize], layout: &Layout) -> Drawing {
     let mut drawing = Drawing::new("small-chain", WIDTH, HEIGHT);
-    let mut placer = Placer::new(Rect::new(-1.0, 0.0, WIDTH + 1.0, HEIGHT));
+    let mut placer = Placer::new(Rect::new(-1.0, 0.0, WIDTH, HEIGHT));
     let Some(page) = layout.pages.first() else { return drawing };
     let per_metre = layout.per_metre();
     let spot = |member: usize, at: f64| {
@@ -152,7 +146,7 @@ fn drawn(all: &[Member], marks: &[&str], beam: usize, members: &[usize], layout:
         let face = if m == beam { Face::SemiBold } else { Face::Regular };
         let room = (WIDTH - a.x).max(12.0);
         let runs = vec![run(face, letters::shortened(face, marks[m], Size::Least, room))];
-        let up = a.y - if m == beam { 1.2 } else { 0.85 };
+        let up = a.y - if m == beam { 1.5 } else { 1.1 };
         let along = (0..12).map(|n| right_of(a.x + f64::from(n) * 1.5, up));
         let beside = [right_of(b.x + 1.0, a.y + 0.6), left_of(a.x - 1.0, a.y + 0.6), left_of(b.x, up)];
         placer.place(&mut drawing, Size::Least, &runs, along.chain(beside));

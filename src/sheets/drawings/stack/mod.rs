@@ -206,9 +206,9 @@ impl Sheet<'_> {
             if let Some(governing) = &governing {
                 self.governing_figures(governing);
             }
-            beams.iter().for_each(|b| self.landing_figures(*b));
             let others = beams.iter().filter(|b| governing.as_ref().is_none_or(|g| g.member != **b));
             others.for_each(|b| self.greatest(*b));
+            beams.iter().for_each(|b| self.landing_figures(*b));
             self.column(governing.as_ref());
         } else {
             self.caption();

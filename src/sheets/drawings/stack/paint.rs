@@ -105,7 +105,7 @@ impl Sheet<'_> {
             k => (1.0 / k, 10.0 / k),
         };
         let last = (most * 1e3 / figured - 1e-9).ceil().max(1.0) * figured;
-        let first = (least * 1e3 / figured + 1e-9).floor().min(0.0) * figured;
+        let first = (least * 1e3 / fine + 0.2).floor().min(0.0) * fine;
         let y = |mm: f64| map.y0 + mm * self.k;
         let (left, right) = (map.x0, map.x(self.stack.places[member].length));
         let (top, foot) = (y(first) - 1.2, y(last) + 1.2);
@@ -162,7 +162,7 @@ impl Sheet<'_> {
         let (top, foot) = (map.point(g.at, 0.0), map.point(g.at, g.total));
         let upright = Path::line(top, foot);
         self.placer.avoid(&upright);
-        self.drawing.tagged(Line::Limit, upright, "governing");
+        self.drawing.tagged(Line::Chord, upright, "governing");
         self.drawing.dot(foot, 0.9);
         self.placer.keep_off(Rect::new(foot.x - 0.9, foot.y - 0.9, foot.x + 0.9, foot.y + 0.9));
         let Some(limit) = g.limit else { return };
@@ -188,7 +188,8 @@ impl Sheet<'_> {
         let beside = |y: f64| [left_of(x - 1.7, y), left_of(x - 3.2, y), right_of(x + 1.7, y)];
         let up = if down { -1.0 } else { 1.0 };
         let places = [middle(foot + 2.6 * up), middle(foot + 4.2 * up), middle(foot - 2.6 * up)];
-        let places: Vec<Place> = places.into_iter().flat_map(beside).collect();
+        let mut places: Vec<Place> = places.into_iter().flat_map(beside).collect();
+        places.extend([1.7, 2.6].map(|d| centred(x, if down { below(foot, d) } else { foot - d })));
         self.placer.place(&mut self.drawing, Size::Diagram, &total, places);
         let mut parts = vec![("own ", g.own, chord, foot)];
         if (g.inherited + g.settled).abs() > NOTHING {
@@ -254,6 +255,9 @@ impl Sheet<'_> {
         let beyond = |d: f64| if down { below(y, d) } else { y - d };
         let places = [1.7, 2.6, 3.6].into_iter().flat_map(|d| sideways(centred(x, beyond(d)), width));
         let inside = sideways(centred(x, if down { y - 2.2 } else { below(y, 2.2) }), width);
-        self.placer.place(&mut self.drawing, Size::Diagram, &runs, places.chain(inside));
+        let across = [1.2, 2.4, 3.6]
+            .into_iter()
+            .flat_map(|d| sideways(centred(x, if down { map.y0 - d } else { below(map.y0, d) }), width));
+        self.placer.place(&mut self.drawing, Size::Diagram, &runs, places.chain(inside).chain(across));
     }
 }

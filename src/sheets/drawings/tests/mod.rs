@@ -3,5 +3,6 @@
 mod buildings;
 mod chains;
 mod diagrams;
+mod measured;
 mod random;
 mod set;

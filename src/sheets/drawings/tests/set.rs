@@ -2,10 +2,11 @@
 
 use chrono::NaiveDate;
 use typst_layout::PagedDocument;
+use typst_pdf::{PdfOptions, PdfStandard, PdfStandards, Timestamp};
 
 use super::super::scene::Drawing;
 use crate::templates::EMBEDDED;
-use crate::world::{DATA, Files, MAIN, SheetWorld};
+use crate::world::{DATA, Files, MAIN, SheetWorld, datetime};
 
 /// One page a drawing. Warnings are errors. With `SAGLEDGER_LOOK` set to a folder, the pages are also written there
 /// as `NAME.pdf`, to be looked at.
@@ -31,8 +32,15 @@ pub fn set(name: &str, drawings: &[Drawing]) -> PagedDocument {
     assert!(set.warnings.is_empty(), "{:?}", set.warnings);
     let document = set.output.unwrap();
     if let Ok(folder) = std::env::var("SAGLEDGER_LOOK") {
-        let pdf = typst_pdf::pdf(&document, &typst_pdf::PdfOptions::default()).unwrap();
-        std::fs::write(std::path::Path::new(&folder).join(format!("{name}.pdf")), pdf).unwrap();
+        std::fs::write(std::path::Path::new(&folder).join(format!("{name}.pdf")), archived(&document)).unwrap();
     }
     document
+}
+
+/// The bytes of a document as an accessible archive: every figure needs its alternative text.
+pub fn archived(document: &PagedDocument) -> Vec<u8> {
+    let standards = PdfStandards::new(&[PdfStandard::A_3a, PdfStandard::Ua_1]).unwrap();
+    let date = NaiveDate::from_ymd_opt(2026, 5, 4).unwrap();
+    let timestamp = datetime(date).map(Timestamp::new_utc);
+    typst_pdf::pdf(document, &PdfOptions { standards, timestamp, ..PdfOptions::default() }).unwrap()
 }
