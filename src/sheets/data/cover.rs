@@ -54,6 +54,9 @@ pub(super) fn cover(package: &Package, view: View, picture: Option<Value>) -> Co
         })
         .collect();
     let verdict = view.results.verdict;
+    let scope = scope(view);
+    let room = room(&meta.title, &open, &scope, &outside);
+    let fits = |picture: &Value| picture.get("height").and_then(Value::as_f64).is_some_and(|height| height <= room);
     Cover {
         number: meta.number.clone(),
         title: meta.title.clone(),
@@ -66,10 +69,25 @@ pub(super) fn cover(package: &Package, view: View, picture: Option<Value>) -> Co
         said: said(view, outside.len()),
         open,
         outside,
-        scope: scope(view),
+        scope,
         closest: closest(view),
-        picture,
+        picture: picture.filter(fits),
     }
+}
+
+/// Height in mm that the words of the cover leave to its picture, at least: lines are counted by letters of generous
+/// width.
+fn room(title: &str, open: &[Item], scope: &Runs, outside: &[Item]) -> f64 {
+    const BODY: f64 = 247.5;
+    /// The line pitch of running text.
+    const LINE: f64 = 4.5;
+    let lines = |letters: usize, a_line: usize| letters.div_ceil(a_line).max(1) as f64;
+    let letters = |runs: &Runs| runs.iter().map(Run::letters).sum::<usize>();
+    let list = |items: &[Item]| items.iter().map(|item| LINE * lines(letters(&item.words), 62)).sum::<f64>();
+    let head = 32.0 + 7.9 * lines(title.chars().count(), 28);
+    let verdict = 21.0 + if open.is_empty() { 0.0 } else { 17.0 + list(open) };
+    let signs = 19.0;
+    BODY - head - verdict - 9.0 - LINE * lines(letters(scope), 62) - list(outside) - signs - 10.0
 }
 
 fn place(site: Option<&str>, client: Option<&str>) -> String {

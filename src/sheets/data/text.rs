@@ -31,6 +31,19 @@ pub(crate) enum Run {
     },
 }
 
+impl Run {
+    /// About how many letters it takes in print.
+    pub fn letters(&self) -> usize {
+        match self {
+            Run::Words(text) | Run::To { text, .. } => text.chars().count(),
+            Run::Value { v, u } => v.chars().count() + u.chars().count() + 1,
+            Run::Sheet { .. } => 9,
+            Run::Sheets { sheets } => 7 + 5 * sheets.len(),
+            Run::Symbol { .. } => 3,
+        }
+    }
+}
+
 pub(crate) type Runs = Vec<Run>;
 
 pub(crate) fn words(text: impl Into<String>) -> Run {
