@@ -13,7 +13,7 @@ use sagledger_calc::workings::decimal;
 use sagledger_calc::workings::unit::Unit;
 use serde::Serialize;
 
-use super::text::{Run, Runs, breakable, keys, sentence, symbol, value, words};
+use super::text::{Run, Runs, keys, sentence, symbol, value, words};
 use super::view::{View, limit_words};
 use crate::package::Package;
 
@@ -24,6 +24,8 @@ pub(super) struct Basis {
     factors: Vec<(Runs, String)>,
     materials: Runs,
     limits: Vec<LimitRow>,
+    /// Some members' marks are too long for their column.
+    long: bool,
     assumptions: Vec<Assumption>,
 }
 
@@ -46,6 +48,8 @@ struct Assumption {
 }
 
 pub(super) fn basis(package: &Package, view: View) -> Basis {
+    let limits = limits(view);
+    let long = limits.iter().any(|row| row.members.chars().count() > 24);
     Basis {
         standards: STANDARDS.iter().map(|s| (s.edition, s.about)).collect(),
         annex: match view.building.basis.choices {
@@ -54,7 +58,8 @@ pub(super) fn basis(package: &Package, view: View) -> Basis {
         },
         factors: factors(view),
         materials: materials(package, view),
-        limits: limits(view),
+        limits,
+        long,
         assumptions: assumptions(view),
     }
 }
@@ -65,10 +70,9 @@ fn two(factor: f64) -> String {
 
 fn factors(view: View) -> Vec<(Runs, String)> {
     let basis = &view.building.basis;
-    let mut rows: Vec<(Runs, String)> = vec![
-        (vec![words("permanent "), symbol("gamma_G")], two(GAMMA_G_UNFAVOURABLE)),
-        (vec![words("permanent, relieving "), symbol("gamma_G")], two(GAMMA_G_FAVOURABLE)),
-    ];
+    let pair = |up: f64, down: f64| format!("{} or {}", two(up), two(down));
+    let mut rows: Vec<(Runs, String)> =
+        vec![(vec![words("permanent "), symbol("gamma_G")], pair(GAMMA_G_UNFAVOURABLE, GAMMA_G_FAVOURABLE))];
     match basis.rule {
         StrengthRule::Single => {}
         StrengthRule::Pair => {
@@ -85,8 +89,8 @@ fn factors(view: View) -> Vec<(Runs, String)> {
         rows.push((vec![words(format!("{name} ")), symbol("psi_0")], two(basis.choices.psi(action).psi_0)));
     }
     rows.push((
-        vec![words("uplift: permanent "), symbol("gamma_G")],
-        format!("{}, {}", two(GAMMA_G_EQUILIBRIUM_UNFAVOURABLE), two(GAMMA_G_EQUILIBRIUM_FAVOURABLE)),
+        vec![words("uplift, permanent "), symbol("gamma_G")],
+        pair(GAMMA_G_EQUILIBRIUM_UNFAVOURABLE, GAMMA_G_EQUILIBRIUM_FAVOURABLE),
     ));
     rows.push((
         vec![words("steel "), symbol("gamma_M0"), words(", "), symbol("gamma_M1")],
@@ -166,7 +170,11 @@ fn limits(view: View) -> Vec<LimitRow> {
             });
         }
         if let Some(row) = rows.get_mut(first) {
-            row.members = breakable(&marks.join(", "));
+            row.members = if marks.len() > 1 && marks.len() == view.building.beams.len() {
+                "all".into()
+            } else {
+                marks.join(", ")
+            };
         }
     }
     rows

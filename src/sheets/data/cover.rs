@@ -8,7 +8,7 @@ use serde::Serialize;
 use serde_json::Value;
 
 use super::text::{Run, Runs, counted, keys, listed, sheet, to, words};
-use super::view::{View, verdict};
+use super::view::View;
 use crate::package::Package;
 
 #[derive(Debug, Serialize)]
@@ -134,13 +134,36 @@ fn open(view: View) -> Vec<Item> {
         }
         for (name, said, beams) in kinds {
             let mut runs = vec![words(format!("{}: {name} of ", wanted.word()))];
-            runs.extend(listed(beams.iter().map(|&b| view.link(b)).collect()));
+            runs.extend(named(view, &beams));
             runs.push(words(said));
             let pairs = beams.iter().map(|&b| (keys::beam_checks(b), keys::beam_checks(b))).collect();
             lines.push(Item { words: runs, beside: vec![Run::Sheets { sheets: pairs }] });
         }
     }
+    if lines.len() > OPEN_ROOM {
+        let more = lines.len() + 1 - OPEN_ROOM;
+        lines.truncate(OPEN_ROOM - 1);
+        lines.push(Item {
+            words: vec![words(format!("and {} more kinds of requirement", counted(more)))],
+            beside: vec![sheet(keys::GOVERNING)],
+        });
+    }
     lines
+}
+
+/// Lines of what is open that the cover has room for; the others stand on the sheet of governing checks.
+const OPEN_ROOM: usize = 6;
+/// Members that a line names.
+const NAMED: usize = 4;
+
+/// "B1, B2 and 3 more".
+fn named(view: View, beams: &[usize]) -> Runs {
+    if beams.len() <= NAMED {
+        return listed(beams.iter().map(|&b| view.link(b)).collect());
+    }
+    let mut runs: Vec<Run> = beams.iter().take(NAMED - 1).map(|&b| view.link(b)).collect();
+    runs.push(words(format!("{} more", beams.len() + 1 - NAMED)));
+    listed(runs)
 }
 
 fn scope(view: View) -> Runs {
@@ -207,7 +230,6 @@ fn closest(view: View) -> Option<Runs> {
     let (index, check) = all?
         .into_iter()
         .max_by(|(_, a), (_, b)| a.utilisation.unwrap_or_default().total_cmp(&b.utilisation.unwrap_or_default()))?;
-    let _ = verdict(check);
     Some(vec![
         words(format!("{} of ", view.check_name(index, check))),
         to(keys::beam(index), view.mark(index)),

@@ -102,6 +102,7 @@ pub(crate) fn breakable(text: &str) -> String {
 pub(crate) mod keys {
     pub const BASIS: &str = "basis";
     pub const MATERIALS: &str = "materials";
+    pub const GOVERNING: &str = "governing";
     pub const LOAD_PATH: &str = "load-path";
     pub const OUTSIDE: &str = "outside";
     pub const RECORD: &str = "record";

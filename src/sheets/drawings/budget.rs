@@ -169,7 +169,7 @@ fn parts(drawing: &mut Drawing, placer: &mut Placer, bar: &Budget, levels: &[Vec
         let (word, rest) =
             if limit >= bar.total { ("left ", limit - bar.total) } else { ("over ", bar.total - limit) };
         let runs = vec![run(Face::Regular, word), run(Face::SemiBold, tenth(rest * 1e3))];
-        for (x, figure) in figures.drain(..).collect::<Vec<_>>() {
+        for (x, figure) in std::mem::take(&mut figures) {
             under_start(drawing, placer, &figure, x, under);
         }
         let start = end.max(x) + 1.2;

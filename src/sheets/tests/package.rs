@@ -159,7 +159,7 @@ fn a_broken_template_names_its_file_and_line() {
     let results = calculate(&building).unwrap();
     let mut package = package(&building, &results, meta("11", "A small job"));
     let cases = [
-        ("#let sheets(d) = {\n  [x\n}\n", "unclosed", 2),
+        ("#let a = 1\n#let sheets(d) = (\n", "unclosed", 2),
         ("#let sheets(d) = {\n  let a = 1\n  d.nothing\n}\n", "nothing", 3),
         ("#import \"@preview/cetz:0.3.0\": canvas\n#let sheets(d) = []\n", "packages are not fetched", 1),
         ("#let sheets(d) = read(\"/etc/passwd\")\n", "not found", 1),
