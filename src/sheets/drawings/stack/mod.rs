@@ -22,7 +22,9 @@ const LEFT: f64 = 3.0;
 const FIRST: f64 = 7.0;
 /// Distance of levels, with figures and on the cover.
 const LEVEL: f64 = 43.0;
-const COVER_LEVEL: f64 = 25.0;
+const COVER_LEVEL: f64 = 16.0;
+/// By these the cover makes movements smaller until the whole chain fits.
+const COVER_FACTORS: [f64; 4] = [1.0, 0.5, 0.2, 0.1];
 /// Greatest height of a drawing on a sheet of its own, and on the cover.
 const TALLEST: f64 = 232.0;
 const TALLEST_COVER: f64 = 84.0;
@@ -130,17 +132,26 @@ impl Stack {
 
     /// The chain with its figures, on as many drawings as it needs.
     pub fn drawings(&self) -> Vec<Drawing> {
-        self.pages(LEVEL, TALLEST, true)
+        self.pages(self.magnification(), LEVEL, TALLEST, true)
     }
 
-    /// The same without figures, for the cover: the drawing that shows the governing beam.
+    /// The same without figures, for the cover: the whole chain, its movements smaller where it has many levels; a
+    /// chain that fits nowhere near is shown by the drawing with the governing beam.
     pub fn cover(&self) -> Option<Drawing> {
-        let pages = self.pages(COVER_LEVEL, TALLEST_COVER, false);
-        pages.into_iter().next()
+        let k = self.magnification();
+        let smaller = COVER_FACTORS.iter().map(|factor| self.pages(k * factor, COVER_LEVEL, TALLEST_COVER, false));
+        let mut last = Vec::new();
+        for pages in smaller {
+            let whole = pages.len() == 1;
+            last = pages;
+            if whole {
+                break;
+            }
+        }
+        last.into_iter().next()
     }
 
-    fn pages(&self, level: f64, tallest: f64, figures: bool) -> Vec<Drawing> {
-        let k = self.magnification();
+    fn pages(&self, k: f64, level: f64, tallest: f64, figures: bool) -> Vec<Drawing> {
         let chosen: Vec<usize> = self.beams.iter().map(|b| b.member).collect();
         let (down, up) = self.extent(chosen.iter().copied());
         let air = if figures { 17.0 } else { 9.0 };
