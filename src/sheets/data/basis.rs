@@ -77,7 +77,7 @@ fn factors(view: View) -> Vec<(Runs, String)> {
         StrengthRule::Single => {}
         StrengthRule::Pair => {
             let xi = decimal::places(basis.choices.xi(), 3, Unit::One);
-            rows.push((vec![words("permanent in (6.10b) "), symbol("xi")], xi));
+            rows.push((vec![symbol("xi"), words(" in (6.10b)")], xi));
         }
     }
     rows.push((vec![words("variable "), symbol("gamma_Q")], two(GAMMA_Q)));
@@ -89,7 +89,7 @@ fn factors(view: View) -> Vec<(Runs, String)> {
         rows.push((vec![words(format!("{name} ")), symbol("psi_0")], two(basis.choices.psi(action).psi_0)));
     }
     rows.push((
-        vec![words("uplift, permanent "), symbol("gamma_G")],
+        vec![words("uplift "), symbol("gamma_G")],
         pair(GAMMA_G_EQUILIBRIUM_UNFAVOURABLE, GAMMA_G_EQUILIBRIUM_FAVOURABLE),
     ));
     rows.push((

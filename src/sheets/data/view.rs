@@ -103,9 +103,10 @@ pub(super) fn amount(check: &Check, si: Option<f64>) -> (String, &'static str) {
 
 /// "3-1-1 6.2.5": the clause column has no room for the words that all its rows share.
 fn short_clause(clause: &str) -> String {
-    match clause.strip_prefix("EN 1993-") {
-        Some(rest) => format!("3-{rest}"),
-        None => clause.to_string(),
+    match (clause.strip_prefix("EN 1993-"), clause.strip_prefix("EN ")) {
+        (Some(rest), _) => format!("3-{rest}"),
+        (None, Some(rest)) => rest.to_string(),
+        (None, None) => clause.to_string(),
     }
 }
 

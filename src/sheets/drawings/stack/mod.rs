@@ -22,12 +22,12 @@ const LEFT: f64 = 3.0;
 const FIRST: f64 = 7.0;
 /// Distance of levels, with figures and on the cover.
 const LEVEL: f64 = 43.0;
-const COVER_LEVEL: f64 = 16.0;
+const COVER_LEVEL: f64 = 25.0;
 /// By these the cover makes movements smaller until the whole chain fits.
 const COVER_FACTORS: [f64; 4] = [1.0, 0.5, 0.2, 0.1];
 /// Greatest height of a drawing on a sheet of its own, and on the cover.
 const TALLEST: f64 = 232.0;
-const TALLEST_COVER: f64 = 84.0;
+const TALLEST_COVER: f64 = 104.0;
 /// Movements that are neither lost nor too large when printed full size, in mm on paper.
 const SEEN: f64 = 2.0;
 const LARGE: f64 = 36.0;
