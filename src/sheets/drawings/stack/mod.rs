@@ -27,7 +27,7 @@ const COVER_LEVEL: f64 = 25.0;
 const COVER_FACTORS: [f64; 4] = [1.0, 0.5, 0.2, 0.1];
 /// Greatest height of a drawing on a sheet of its own, and on the cover.
 const TALLEST: f64 = 232.0;
-const TALLEST_COVER: f64 = 104.0;
+const TALLEST_COVER: f64 = 80.0;
 /// Movements that are neither lost nor too large when printed full size, in mm on paper.
 const SEEN: f64 = 2.0;
 const LARGE: f64 = 36.0;
