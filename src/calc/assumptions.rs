@@ -148,9 +148,11 @@ pub fn assumptions(building: &Building, actions: &Actions) -> Vec<Assumption> {
             (_, FlangeHold::Continuous) => "the bottom flange",
             _ => continue,
         };
+        let (is, mark) = (if side == "both flanges" { "are" } else { "is" }, &beam.mark);
+        let held = format!("On {mark}, {side} {is} held along the whole length");
         let sentence = match &beam.restraint.by {
-            Some(by) => format!("On {}, {by} hold {side} along the whole length.", beam.mark),
-            None => format!("On {}, {side} is held along the whole length.", beam.mark),
+            Some(by) => format!("{held} by {by}."),
+            None => format!("{held}."),
         };
         say(AssumptionKind::FlangeHeld, vec![beam.mark.clone()], sentence);
     }

@@ -165,8 +165,8 @@ pub fn read_and_compute(path: &Path, format: Format, shared: &Shared) -> Result<
             }
             Ok(computed)
         }
-        Err((job, faults)) => {
-            let all = in_order(&job, warnings, faults);
+        Err(refused) => {
+            let all = in_order(&refused.job, warnings, refused.faults);
             tell(&reading.source, &all, format, shared)?;
             Err(Ending::Input)
         }

@@ -13,11 +13,13 @@ pub(super) struct Findings<'s> {
     pub source: &'s Source,
     list: Vec<Fault>,
     unlisted: usize,
+    /// Tables whose header was told to be missing, so that what they hold is not known.
+    missing_headers: Vec<&'static str>,
 }
 
 impl<'s> Findings<'s> {
     pub fn new(source: &'s Source) -> Findings<'s> {
-        Findings { source, list: Vec::new(), unlisted: 0 }
+        Findings { source, list: Vec::new(), unlisted: 0, missing_headers: Vec::new() }
     }
 
     pub fn add(&mut self, fault: Fault) {
@@ -25,6 +27,18 @@ impl<'s> Findings<'s> {
             true => self.list.push(fault),
             false => self.unlisted += 1,
         }
+    }
+
+    /// Tells that a table's header is missing before a part.
+    pub fn header_missing(&mut self, title: &'static str, before: &Span) {
+        let fact = format!("a line {title} is missing above this");
+        let remedy = format!("put {title} above it");
+        self.add(Fault::new(Name::HeaderMissing, Some(before.clone()), fact, remedy));
+        self.missing_headers.push(title);
+    }
+
+    pub fn lacks_header(&self, title: &str) -> bool {
+        self.missing_headers.contains(&title)
     }
 
     pub fn line(&self, span: &Span) -> usize {

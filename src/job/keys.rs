@@ -212,9 +212,55 @@ impl Keys {
     }
 }
 
-/// Tables, other than `here`, that have this key.
-pub(super) fn tables_with<'k>(key: &'k str, here: &'k Keys) -> impl Iterator<Item = &'static Keys> + 'k {
-    TABLES.into_iter().filter(move |table| !std::ptr::eq(*table, here) && table.has(key))
+/// Tables that begin with a line in brackets, with the key that each of them has and no other table can do without;
+/// of those that a list of keys fits equally well, the first is meant.
+const HEADED: [(&Keys, &str, Option<&str>); 8] = [
+    (&JOB, "[job]", None),
+    (&WALL, "[[wall]]", Some("name")),
+    (&BUILD_UP, "[[build-up]]", Some("name")),
+    (&BEAM, "[[beam]]", Some("mark")),
+    (&LOAD, "[[beam.load]]", Some("what")),
+    (&BASIS, "[basis]", None),
+    (&LIMITS, "[limits]", None),
+    (&PACKAGE, "[package]", None),
+];
+
+/// A table whose header seems to be missing above the first of some keys that do not belong to `here`: they hold the
+/// key that it begins with or, for a table without such a key, two of its own.
+pub(super) fn headless(strangers: &[&str], here: &Keys) -> Option<(&'static Keys, &'static str)> {
+    let mut best: Option<(usize, &'static Keys, &'static str)> = None;
+    for (table, title, first) in HEADED {
+        let fitting = strangers.iter().filter(|key| table.has(key)).count();
+        let begins = match first {
+            Some(first) => strangers.first() == Some(&first),
+            None => fitting >= 2 && strangers.first().is_some_and(|key| table.has(key)),
+        };
+        if begins && !std::ptr::eq(table, here) && best.is_none_or(|(most, ..)| fitting > most) {
+            best = Some((fitting, table, title));
+        }
+    }
+    best.map(|(_, table, title)| (table, title))
+}
+
+/// The table, other than `here`, that a key most likely belongs to.
+pub(super) fn home_of(key: &str, here: &Keys) -> Option<&'static Keys> {
+    let is = |one: &Keys, other: &Keys| std::ptr::eq(one, other);
+    let near: &[&'static Keys] = match here {
+        here if is(here, &BEAM) => &[&LOAD, &BEARING, &RESTRAINT],
+        here if is(here, &LOAD) || is(here, &RESTRAINT) => &[&BEAM],
+        here if is(here, &BEARING) => &[&BEAM],
+        here if is(here, &BUILD_UP) => &[&LAYER, &IMPOSED],
+        here if is(here, &LAYER) || is(here, &IMPOSED) => &[&BUILD_UP, &LAYER],
+        here if is(here, &WALL) => &[&BEARING],
+        _ => &[],
+    };
+    let file_last = TABLES.into_iter().skip(1).chain([&FILE]);
+    near.iter().copied().chain(file_last).find(|table| !is(table, here) && table.has(key))
+}
+
+/// The key that begins a table in a list, such as `mark`: twice in one table, it begins another.
+pub(super) fn begins_a_table(key: &str) -> bool {
+    HEADED.iter().any(|(.., first)| *first == Some(key))
 }
 
 #[cfg(test)]

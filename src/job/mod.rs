@@ -91,13 +91,6 @@ impl Reading {
         Reading { source: Source::new(file, ""), findings: vec![fault], job: None }
     }
 
-    /// Takes in what only the calculation could find: the job is at fault after all.
-    pub fn refuse(&mut self, faults: &[sagledger_calc::fault::Fault]) {
-        let Some(job) = self.job.take() else { return };
-        self.findings.extend(faults.iter().map(|fault| job.explain_fault(fault)));
-        findings::in_order(&mut self.findings);
-    }
-
     pub fn faults(&self) -> usize {
         self.findings.iter().filter(|f| f.kind() == Kind::Fault).count()
     }
@@ -156,6 +149,15 @@ fn understand<'s>(
         logo.picture = picture;
     }
     found.leave_out_within(&parsed.spoiled, told);
+    if let Some(part) = parsed.spoiled.first().filter(|_| !found.has_faults()) {
+        // What the parser complained of is told elsewhere, or here.
+        found.add(Fault::new(
+            Name::Syntax,
+            Some(part.clone()),
+            "this part cannot be read",
+            "mend it or take it out",
+        ));
+    }
     let (building, origins) = building?;
     Some((meta?, building, origins))
 }

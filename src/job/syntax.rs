@@ -8,6 +8,7 @@ use toml::de::{DeTable, Error};
 use super::brackets::unclosed;
 use super::fault::{Fault, Span};
 use super::findings::Findings;
+use super::keys::{self, Keys};
 use super::registry::Name;
 
 /// More complaints than this are not worth telling one by one: the file is not a job.
@@ -38,6 +39,15 @@ pub(super) fn parse<'t>(text: &'t str, found: &mut Findings) -> Parsed<'t> {
     let mut last_line = 0;
     for error in &errors {
         let span = widened(text, error.span());
+        if spoiled.iter().any(|part| part.contains(&span.start)) {
+            continue;
+        }
+        if error.message() == "duplicate key"
+            && let Some(rest) = second_beginning(&span, text, found)
+        {
+            spoiled.push(rest);
+            continue;
+        }
         let line = found.line(&span);
         if let Some(open) = open.clone().filter(|open| span.start >= open.start) {
             let fact = "a list that is not closed";
@@ -151,6 +161,38 @@ fn fault(error: &Error, span: Span, text: &str, found: &Findings) -> Fault {
         other if expected.is_empty() => syntax(&lower(other), "mend or take out this part".into()),
         other => syntax(&lower(other), format!("here can stand {}", expected.replace('`', ""))),
     }
+}
+
+/// Where a key that begins a table of a list stands a second time, most often the header between the two is missing.
+/// Says so, and gives what follows up to the next header: nothing in it can be read for certain. A header that is
+/// twice only because a table below it came first is left to whoever reads that table.
+fn second_beginning(span: &Span, text: &str, found: &mut Findings) -> Option<Span> {
+    let line_start = text[..span.start].rfind('\n').map_or(0, |n| n + 1);
+    let before = text[line_start..span.start].trim_start();
+    let key = &text[span.clone()];
+    if before.starts_with('[') {
+        let is_list = keys::FILE.now.iter().any(|(name, example)| *name == key && example.starts_with("[["));
+        return (is_list && first_of(span.start, key, text).is_none()).then(|| span.clone());
+    }
+    if !before.is_empty() || !keys::begins_a_table(key) || found.count() > MOST_LOOKED_UP {
+        return None;
+    }
+    let header = text[..line_start].lines().rev().map(str::trim_start).find(|line| line.starts_with("[["))?;
+    let title = keys::TABLES.iter().map(|table| table.title).find(|title| header.starts_with(title))?;
+    let is_header = |at: &usize| text[*at..].trim_start_matches([' ', '\t']).starts_with("[[");
+    let next = text[span.end..].match_indices('\n').map(|(at, _)| span.end + at + 1).find(is_header);
+    let rest = span.start..next.unwrap_or(text.len());
+    // A name with nothing behind it that only a build-up has is that of a wall.
+    let has_keys_of = |table: &Keys| {
+        let key_of = |line: &str| line.split('=').next().map(|key| key.trim().to_string());
+        text[rest.clone()].lines().skip(1).filter_map(key_of).any(|key| key != "name" && table.has(&key))
+    };
+    let title = match title {
+        "[[build-up]]" if !has_keys_of(&keys::BUILD_UP) => keys::WALL.title,
+        title => title,
+    };
+    found.header_missing(title, span);
+    Some(rest)
 }
 
 fn twice(span: Span, part: &str, found: &Findings) -> Fault {

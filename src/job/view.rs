@@ -72,34 +72,61 @@ impl<'t> Table<'t> {
             table.iter().map(|(key, value)| (key.get_ref().as_ref(), key.span(), value)).collect();
         typed.sort_by_key(|(_, span, _)| span.start);
         let mut view = Table { keys, called: keys.title.to_string(), place, items: Vec::new(), meant: Vec::new() };
+        let mut strangers: Vec<(&str, Span)> = Vec::new();
         for (key, key_span, value) in typed {
-            if let Some((name, _)) = keys.now.iter().find(|(name, _)| *name == key) {
-                view.items.push(Item { key: name, value: value.get_ref(), span: value.span(), key_span });
-            } else if let Some(name) = keys.later.iter().find(|name| **name == key) {
-                found.add(later(name, keys, key_span));
-            } else {
-                view.unknown(key, key_span, found);
+            match keys.now.iter().find(|(name, _)| *name == key) {
+                Some((name, _)) => {
+                    view.items.push(Item { key: name, value: value.get_ref(), span: value.span(), key_span })
+                }
+                None => strangers.push((key, key_span)),
             }
         }
+        view.tell_strangers(strangers, found);
         view
     }
 
+    /// Keys that this table does not read: those of a table whose header is missing together, others one by one.
+    fn tell_strangers(&mut self, mut strangers: Vec<(&str, Span)>, found: &mut Findings) {
+        let mut at = 0;
+        while at < strangers.len() {
+            let rest: Vec<&str> = strangers[at..].iter().map(|(key, _)| *key).collect();
+            if let Some((table, title)) = keys::headless(&rest, self.keys) {
+                found.header_missing(title, &strangers[at].1);
+                self.meant.extend(self.keys.now.iter().map(|(name, _)| *name).filter(|name| title.contains(*name)));
+                let mut index = 0;
+                strangers.retain(|(key, _)| {
+                    index += 1;
+                    index <= at || !table.has(key)
+                });
+                continue;
+            }
+            let (key, span) = strangers[at].clone();
+            match self.keys.later.iter().find(|name| **name == key) {
+                Some(name) => found.add(later(name, self.keys, span)),
+                None => self.unknown(key, span, found),
+            }
+            at += 1;
+        }
+    }
+
     fn unknown(&mut self, key: &str, span: Span, found: &mut Findings) {
-        let absent = |name: &&str| !self.items.iter().any(|item| item.key == *name);
+        // Lists such as [[wall]] may well be there under their right name too.
+        let listed = std::ptr::eq(self.keys, &keys::FILE);
+        let absent = |name: &&str| listed || !self.items.iter().any(|item| item.key == *name);
         let near = nearest(key, self.keys.now.iter().map(|(name, _)| *name).filter(absent));
         let fact = format!("{} has no key of this name", self.keys.title);
         let fault = |remedy: String| Fault::new(Name::KeyUnknown, Some(span.clone()), fact.clone(), remedy);
-        let elsewhere: Vec<&Keys> = keys::tables_with(key, self.keys).collect();
-        let is = |one: &Keys, other: &Keys| std::ptr::eq(one, other);
-        let of_the_beam = is(self.keys, &keys::LOAD) && elsewhere.iter().any(|table| is(table, &keys::BEAM));
-        let fault = match (near.first(), elsewhere.as_slice()) {
+        let under_a_load = std::ptr::eq(self.keys, &keys::LOAD);
+        let fault = match (near.first(), keys::home_of(key, self.keys)) {
             (Some(name), _) => {
                 self.meant.extend(self.keys.now.iter().map(|(n, _)| *n).filter(|n| n == name));
                 fault(format!("write {name}")).replaced_by(*name)
             }
-            (None, _) if of_the_beam => fault(format!("{key} belongs to [[beam]]: move it above [[beam.load]]")),
-            (None, [one, ..]) => fault(format!("{key} belongs to {}: move it there", one.title)),
-            (None, []) => {
+            (None, Some(home)) if under_a_load && std::ptr::eq(home, &keys::BEAM) => {
+                fault(format!("{key} belongs to [[beam]]: move it above [[beam.load]]"))
+            }
+            (None, Some(home)) => fault(format!("{key} belongs to {}: move it there", home.title)),
+            (None, None) => {
                 let known: Vec<&str> = self.keys.now.iter().map(|(name, _)| *name).collect();
                 fault(match known.as_slice() {
                     [one] => format!("take it out: the only key here is {one}"),

@@ -99,7 +99,8 @@ fn unicode(term: &str, terminal: bool) -> bool {
         Some(locale) => {
             let lower = locale.to_lowercase();
             let wide = ["zh", "ja", "ko"].iter().any(|language| lower.starts_with(language));
-            (lower.contains("utf-8") || lower.contains("utf8")) && !wide || (!terminal && !wide)
+            let utf8 = lower.contains("utf-8") || lower.contains("utf8");
+            !wide && (utf8 || !terminal)
         }
     }
 }

@@ -219,7 +219,7 @@ impl Collect<'_> {
                 forces.push((seat.at, place, bearing.design_max.clone(), way, stiff));
             }
         }
-        for (at, place, values, stiff) in self.from_above() {
+        for (at, place, values, stiff) in self.forces_from_above() {
             if let Some(force) = scalar::<1, 0>(solved, values, &[self.sets.strength()], Sense::Greatest) {
                 forces.push((at, place, force, Way::Within, stiff));
             }
@@ -242,7 +242,7 @@ impl Collect<'_> {
 
     /// Forces that come in through the top flange: point loads and beams that land on it. Those at one place act
     /// together, over the least of their stiff lengths.
-    fn from_above(&self) -> Vec<FromAbove> {
+    fn forces_from_above(&self) -> Vec<FromAbove> {
         let (solved, local) = (self.solved, self.local);
         let index = solved.members[local];
         let mut together: Vec<FromAbove> = Vec::new();

@@ -10,6 +10,9 @@ use crate::job::tables::Typed;
 use crate::job::values::{either, quoted};
 use crate::job::view::At;
 
+/// Marks of this length are near each other without a slip of the pen.
+const SHORT: usize = 3;
+
 /// What a bearing can stand on.
 #[derive(Clone, Copy, Debug, PartialEq, Eq)]
 pub(super) enum Support {
@@ -109,8 +112,8 @@ impl Names {
             false => Vec::new(),
         };
         let is_near = !near.is_empty();
-        if !is_near && hidden {
-            // It may be the name of one that has been told to lack it.
+        if hidden && !(is_near && typed.value.chars().count() > SHORT) {
+            // It may be the name of one that has been told to lack it; short marks are all alike.
             return;
         }
         if near.is_empty() && known.len() <= 3 {

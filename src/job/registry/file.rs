@@ -145,6 +145,15 @@ pub(super) const ENTRIES: &[Entry] = &[
         right: "{ on = \"north wall\", bearing-length = \"150 mm\" }",
     },
     Entry {
+        name: Name::HeaderMissing,
+        text: "header-missing",
+        kind: Fault,
+        meaning: "The keys from here on belong to another table, whose first line in brackets is not there. Without it \
+                  TOML counts them to the table above.",
+        wrong: "[[wall]]\nname = \"north wall\"\nmark = \"B1\"\nlength = \"5.20 m\"",
+        right: "[[wall]]\nname = \"north wall\"\n\n[[beam]]\nmark = \"B1\"\nlength = \"5.20 m\"",
+    },
+    Entry {
         name: Name::NotInThisVersion,
         text: "not-in-this-version",
         kind: Fault,

@@ -40,6 +40,7 @@ pub enum Name {
     KeyUnknown,
     KeyMissing,
     KeyOutOfPlace,
+    HeaderMissing,
     NotInThisVersion,
     TypeWrong,
     ValueUnknown,

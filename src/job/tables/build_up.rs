@@ -62,7 +62,7 @@ pub(super) fn read(table: &Table, found: &mut Findings) -> TypedBuildUp {
         name: super::referable(table, "name"),
         place: table.place.clone(),
         on_plan: ["pitch", "imposed", "snow", "wind"].into_iter().filter(|key| table.has(key)).collect(),
-        has_wind: table.has("wind"),
+        has_wind: table.has("wind") || table.hides("wind"),
         meant: meant(),
     }
 }

@@ -241,7 +241,7 @@ fn direct_actions(table: &Table, found: &mut Findings) -> TypedKind {
             found.add(item.fault(Name::CategoryMissing, fact, "add category, A to H"));
             actions.faulty = true;
         }
-        (None, Field::Given(_)) => {
+        (None, Field::Given(_)) if !table.hides("imposed") => {
             let remedy = "take it out, or add the imposed load";
             table.out_of_place("category", "category without imposed", remedy, found);
         }

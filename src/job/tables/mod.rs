@@ -83,20 +83,30 @@ pub(super) fn read(parsed: &Parsed, found: &mut Findings) -> Typed {
         .collect();
     let tables = rows(&root, "beam", &keys::BEAM, found);
     let beams: Vec<TypedBeam> = tables.into_iter().map(|table| beam::read(table, found)).collect();
-    if !root.has("beam") && !root.hides("beam") {
+    if !root.has("beam") && !root.hides("beam") && !found.lacks_header("[[beam]]") {
         let remedy = "begin one with a line [[beam]]";
         found.add(Fault::new(Name::BeamMissing, Some(0..0), "the job has no beam", remedy));
     }
     let later_supports = later_supports(parsed);
     let hidden = |key: &str| root.hides(key) || root.get(key).is_some_and(|item| item.value.as_array().is_none());
-    let supports_hidden = hidden("wall") || hidden("beam");
-    let build_ups_hidden = hidden("build-up");
+    let supports_hidden =
+        hidden("wall") || hidden("beam") || found.lacks_header("[[wall]]") || found.lacks_header("[[beam]]");
+    let build_ups_hidden = hidden("build-up") || found.lacks_header("[[build-up]]");
     Typed { supports_hidden, build_ups_hidden, meta, logo, basis, limits, build_ups, walls, later_supports, beams }
 }
 
 /// The tables of a list such as `[[beam]]`.
 pub(super) fn rows<'t>(parent: &Table<'t>, key: &str, keys: &'static Keys, found: &mut Findings) -> Vec<Table<'t>> {
     let Some(item) = parent.get(key) else { return Vec::new() };
+    if let DeValue::Table(_) = item.value
+        && item.span == item.key_span
+    {
+        // No header of its own: a table below it, such as [[beam.load]], stands before any [[beam]].
+        if !found.lacks_header(keys.title) {
+            found.header_missing(keys.title, &item.span);
+        }
+        return Vec::new();
+    }
     if let DeValue::Table(_) = item.value {
         let fact = format!("[{}] in single brackets", keys.title.trim_matches(['[', ']']));
         found.add(item.fault(Name::TypeWrong, fact, format!("write {}", keys.title)));

@@ -17,7 +17,7 @@ const LEFT: f64 = 3.0;
 /// Of the first level's line from the top, between levels, and what hangs below the last one.
 const FIRST: f64 = 8.6;
 const LEVEL: f64 = 24.0;
-const LAST: f64 = 14.0;
+const LAST: f64 = 15.4;
 /// The band of load above a member: its foot and its top.
 const BAND: (f64, f64) = (1.0, 3.7);
 
@@ -165,11 +165,11 @@ impl<'a> Sheet<'a> {
         for placed in &page.placed {
             self.mark(placed.member);
         }
-        for landing in &landings {
-            self.landing_labels(landing);
-        }
         for placed in &page.placed {
             self.reactions_of_walls(placed.member);
+        }
+        for landing in &landings {
+            self.landing_labels(landing);
         }
         for placed in &page.placed {
             self.load_label(placed.member);
@@ -354,7 +354,8 @@ impl<'a> Sheet<'a> {
                 .into_iter()
                 .flat_map(|down| [right_of(x + 1.5, y + down), left_of(x - 1.5, y + down)]);
             let reaction = self.reaction(member, n);
-            let mut told = self.placer.place(&mut self.drawing, Size::Diagram, &reaction, figure);
+            let lower = around(x, y + 14.6);
+            let mut told = self.placer.place(&mut self.drawing, Size::Diagram, &reaction, figure.chain(lower));
             for width in [60.0, 24.0, 15.0] {
                 let short = letters::shortened(Face::Regular, &name, Size::Diagram, width);
                 let placed = told
@@ -388,11 +389,13 @@ impl<'a> Sheet<'a> {
         }
         let total = run(Face::SemiBold, three(shown.total / 1e3));
         let top = y - BAND.1 - 1.0;
-        for width in [120.0, 40.0, 26.0] {
+        for width in [120.0, 80.0, 56.0, 40.0, 26.0] {
             let name = letters::shortened(Face::Regular, &shown.loads, Size::Diagram, width);
             let runs = vec![run(Face::Regular, format!("{name} ")), total.clone()];
             let middle = 0.5 * (left + right);
-            let places = sideways(centred(middle, top), (0.6 * (right - left)).max(20.0));
+            // Over the band, else to the right of what stands in the way.
+            let along = (0..((right - left) / 2.0) as i32).map(|n| right_of(left + 2.0 * f64::from(n), top));
+            let places = sideways(centred(middle, top), (0.6 * (right - left)).max(20.0)).chain(along);
             if self.placer.place(&mut self.drawing, Size::Diagram, &runs, places) {
                 if name != shown.loads {
                     self.column.push(words(format!("{}: {}", shown.mark, shown.loads)));

@@ -11,7 +11,7 @@ use super::scene::{Drawing, Line, Path, Rect, Size, point};
 const WIDTH: f64 = 40.0;
 const HEIGHT: f64 = 17.0;
 const LEVEL: f64 = 5.5;
-const FIRST: f64 = 3.4;
+const FIRST: f64 = 3.8;
 const PAPER: Paper = Paper { width: 37.6, rows: 60, gap: 5.0, clear: 1.0, scales: &[] };
 
 /// The small drawing of what this member stands on and what lands on it. None for an index without a beam.

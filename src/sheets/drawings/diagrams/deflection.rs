@@ -138,14 +138,15 @@ fn inherited(sheet: &mut Sheet, part: &mut Part, map: &Mapping, chord: &[Peak]) 
         runs.extend(value(text, if n == 0 { "mm" } else { "" }));
         let (x, y) = (map.x(peak.at), map.y(peak.value));
         let mut places = Vec::new();
-        for step in 0..9 {
-            let away = f64::from(step);
+        for step in 0..18 {
+            let away = 0.5 * f64::from(step);
             let (up, down) = (y - 1.0 - away, below(y, 1.0 + away));
-            places.extend([left_of(x - 0.6, up), right_of(x + 0.6, up)]);
-            if step < 5 {
-                places.extend([left_of(x - 0.6, down), right_of(x + 0.6, down)]);
+            for aside in [0.6, 4.0, 8.0] {
+                places.extend([left_of(x - aside, up), right_of(x + aside, up)]);
+                if step < 12 {
+                    places.extend([left_of(x - aside, down), right_of(x + aside, down)]);
+                }
             }
-            places.extend([left_of(x - 8.0, up), right_of(x + 8.0, up)]);
         }
         if !sheet.placer.place(&mut sheet.drawing, Size::Diagram, &runs, places) {
             runs.push(run(Face::Regular, format!(" at {}", figures::place(peak.at))));
@@ -173,7 +174,9 @@ fn lesser_peaks(data: &Diagrams, sheet: &mut Sheet, part: &mut Part, map: &Mappi
         if sheet.placer.place(&mut sheet.drawing, Size::Diagram, &runs, places) {
             sheet.drawing.dot(point(x, y), 0.5);
         } else {
-            part.displaced.push(runs);
+            let mut line = words("stacked ");
+            line.extend(runs);
+            part.displaced.push(line);
         }
     }
 }

@@ -154,7 +154,8 @@ pub(super) fn draw_moment(data: &Diagrams, sheet: &mut Sheet) -> Part {
         if figures::is_zero(&text) {
             continue;
         }
-        let unit = if peak.value == most || peak.value == least { "kNm" } else { "" };
+        let extreme = |v: f64| (peak.value - v).abs() <= 1e-9 * size;
+        let unit = if extreme(most) || extreme(least) { "kNm" } else { "" };
         let after = format!(" at {}", figures::place(peak.at));
         let runs = value_and(text.clone(), unit, after.clone());
         let width = letters::width(&runs, Size::Diagram);

@@ -26,7 +26,7 @@ const AXIS: f64 = TEXT - 2.0 * INSET;
 const LOADING: (f64, f64) = (0.0, 22.0);
 const SHEAR: (f64, f64) = (32.0, 22.0);
 const MOMENT: (f64, f64) = (64.0, 21.0);
-const DEFLECTION: (f64, f64) = (97.0, 25.2);
+const DEFLECTION: (f64, f64) = (97.0, 28.0);
 const RULER: f64 = 130.4;
 const HEIGHT: f64 = 137.0;
 
@@ -78,7 +78,8 @@ impl Diagrams {
             _ => format!("{name}, absent where it relieves"),
         };
         let row_name = |row: usize| found.rows.get(row).map_or_else(String::new, |r| r.what.clone());
-        let bands = drawn.line_loads.iter().map(|load| Band {
+        let bands = drawn.line_loads.iter().filter(|l| l.intensity.0.si() != 0.0 || l.intensity.1.si() != 0.0);
+        let bands = bands.map(|load| Band {
             what: row_name(load.row),
             from: load.from.si(),
             to: load.to.si(),
@@ -113,7 +114,7 @@ impl Diagrams {
             bearings: typed.bearings.iter().map(|b| b.at.si()).collect(),
             strength: arranged(name(drawn.strength), drawn.strength_arrangement.absent.len()),
             characteristic: arranged(name(drawn.characteristic), drawn.characteristic_arrangement.absent.len()),
-            bands: bands.filter(|b| b.intensity != (0.0, 0.0) && b.from < b.to).collect(),
+            bands: joined(bands.filter(|b| b.from < b.to)),
             forces: forces.filter(|f| f.force != 0.0).collect(),
             shear: drawn.shear.clone(),
             moment: drawn.moment.clone(),
@@ -153,6 +154,27 @@ impl Diagrams {
         sheet.drawing.alt = said::alt(self);
         sheet.drawing
     }
+}
+
+/// Pieces of one row, cut at bearings, become one band again where they continue each other in a straight line.
+fn joined(pieces: impl Iterator<Item = Band>) -> Vec<Band> {
+    let mut list: Vec<Band> = Vec::new();
+    for next in pieces {
+        let slope = |b: &Band| (b.intensity.1 - b.intensity.0) / (b.to - b.from);
+        let size = next.intensity.0.abs().max(next.intensity.1.abs());
+        let length = next.to - next.from;
+        let continued = list.iter_mut().find(|b| {
+            b.what == next.what
+                && (b.to - next.from).abs() < 1e-9
+                && (b.intensity.1 - next.intensity.0).abs() <= 1e-9 * size
+                && ((slope(b) - slope(&next)) * length).abs() <= 1e-9 * size
+        });
+        match continued {
+            Some(band) => (band.to, band.intensity.1) = (next.to, next.intensity.1),
+            None => list.push(next),
+        }
+    }
+    list
 }
 
 /// A line of the outer column; one that is too wide is broken and loses its weights.

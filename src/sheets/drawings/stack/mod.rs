@@ -23,9 +23,11 @@ const FIRST: f64 = 7.0;
 /// Distance of levels, with figures and on the cover.
 const LEVEL: f64 = 43.0;
 const COVER_LEVEL: f64 = 25.0;
+/// By these the cover makes movements smaller until the whole chain fits.
+const COVER_FACTORS: [f64; 4] = [1.0, 0.5, 0.2, 0.1];
 /// Greatest height of a drawing on a sheet of its own, and on the cover.
 const TALLEST: f64 = 232.0;
-const TALLEST_COVER: f64 = 104.0;
+const TALLEST_COVER: f64 = 80.0;
 /// Movements that are neither lost nor too large when printed full size, in mm on paper.
 const SEEN: f64 = 2.0;
 const LARGE: f64 = 36.0;
@@ -63,6 +65,12 @@ pub struct Governing {
     pub settled: f64,
     pub total: f64,
     pub limit: Option<f64>,
+}
+
+impl Governing {
+    fn terms(&self) -> [(&'static str, f64); 3] {
+        [("own", self.own), ("inherited", self.inherited), ("settled", self.settled)]
+    }
 }
 
 impl Stack {
@@ -108,6 +116,20 @@ impl Stack {
         self.beams.iter().find(|b| b.member == member)
     }
 
+    /// What a beam moves with besides its own bending: what carries it, walls that settle, or both.
+    fn rest_of(&self, member: usize) -> &'static str {
+        let settles = self.beams.iter().any(|b| {
+            let seats = self.places[b.member].seats.iter().zip(&b.seats);
+            seats.into_iter().any(|(seat, moved)| seat.on.is_none() && *moved != 0.0)
+        });
+        let carried = self.places[member].seats.iter().any(|s| s.on.is_some());
+        match (carried, settles) {
+            (true, true) => "inherited and settled",
+            (false, true) => "settled",
+            _ => "inherited",
+        }
+    }
+
     /// Greatest movements down and up over some beams, in mm.
     fn extent(&self, members: impl Iterator<Item = usize>) -> (f64, f64) {
         let ranges = members.filter_map(|m| self.moved(m)).map(|b| shape::range(&b.stacked));
@@ -130,39 +152,79 @@ impl Stack {
 
     /// The chain with its figures, on as many drawings as it needs.
     pub fn drawings(&self) -> Vec<Drawing> {
-        self.pages(LEVEL, TALLEST, true)
+        self.pages(self.magnification(), LEVEL, TALLEST, true)
     }
 
-    /// The same without figures, for the cover: the drawing that shows the governing beam.
+    /// The same without figures, for the cover: the whole chain, its movements smaller where it has many levels; a
+    /// chain that fits nowhere near is shown by the drawing with the governing beam.
     pub fn cover(&self) -> Option<Drawing> {
-        let pages = self.pages(COVER_LEVEL, TALLEST_COVER, false);
-        pages.into_iter().next()
+        let k = self.magnification();
+        let smaller = COVER_FACTORS.iter().map(|factor| self.pages(k * factor, COVER_LEVEL, TALLEST_COVER, false));
+        let mut last = Vec::new();
+        for pages in smaller {
+            let whole = pages.len() == 1;
+            last = pages;
+            if whole {
+                break;
+            }
+        }
+        last.into_iter().next()
     }
 
-    fn pages(&self, level: f64, tallest: f64, figures: bool) -> Vec<Drawing> {
-        let k = self.magnification();
+    /// Fewer levels a drawing until each drawing fits its height.
+    fn pages(&self, k: f64, level: f64, tallest: f64, figures: bool) -> Vec<Drawing> {
         let chosen: Vec<usize> = self.beams.iter().map(|b| b.member).collect();
-        let (down, up) = self.extent(chosen.iter().copied());
-        let air = if figures { 17.0 } else { 9.0 };
-        let pitch = level.max((down + up) * k + air);
-        let foot = down * k + if figures { 10.0 } else { 5.0 };
-        let rows = ((tallest - FIRST - up * k - foot) / pitch).floor().max(0.0) as usize + 1;
-        let paper = Paper { rows, ..PAPER };
-        let layout = lay_out(&self.places, &chosen, &paper);
-        let mut pages: Vec<&Page> = layout.pages.iter().collect();
-        if !figures && let Some(governing) = &self.governing {
-            pages.sort_by_key(|p| p.find(governing.member).is_none());
+        let mut rows = if figures { 5 } else { 6 };
+        loop {
+            let layout = lay_out(&self.places, &chosen, &Paper { rows, ..PAPER });
+            let levels: Vec<Levels> =
+                layout.pages.iter().map(|p| self.levels(p, k, level, tallest, figures)).collect();
+            if rows > 1 && levels.iter().any(|l| l.height > tallest) {
+                rows -= 1;
+                continue;
+            }
+            return self.drawn(&layout, levels, k, figures);
         }
-        let drawings = pages.into_iter().map(|page| {
-            let height = FIRST + up * k + pitch * (page.rows.max(1) - 1) as f64 + foot;
-            let kind = if figures { "stack-drawing" } else { "cover-picture" };
+    }
+
+    /// Where the rows of a page stand: at their distance, or farther apart where movements need the room; on the
+    /// cover closer, down to what the movements need, if the drawing would else be too tall.
+    fn levels(&self, page: &Page, k: f64, distance: f64, tallest: f64, figures: bool) -> Levels {
+        let extents: Vec<(f64, f64)> = (0..page.rows.max(1))
+            .map(|row| {
+                let (down, up) = self.extent(page.placed.iter().filter(|p| p.row == row).map(|p| p.member));
+                (down * k, up * k)
+            })
+            .collect();
+        let air = if figures { 17.0 } else { 9.0 };
+        let foot = if figures { 10.0 } else { 5.0 };
+        let stand = |distance: f64| {
+            let mut at = vec![FIRST + extents[0].1];
+            for pair in extents.windows(2) {
+                let last = at.last().copied().unwrap_or(0.0);
+                at.push(last + distance.max(pair[0].0 + pair[1].1 + air));
+            }
+            let last = at.last().copied().unwrap_or(0.0) + extents.last().map_or(0.0, |e| e.0);
+            Levels { at, height: last + foot }
+        };
+        let full = stand(distance);
+        if figures || full.height <= tallest { full } else { stand(distance.min(15.0)) }
+    }
+
+    fn drawn(&self, layout: &Layout, levels: Vec<Levels>, k: f64, figures: bool) -> Vec<Drawing> {
+        let mut pages: Vec<(&Page, Levels)> = layout.pages.iter().zip(levels).collect();
+        if !figures && let Some(governing) = &self.governing {
+            pages.sort_by_key(|(p, _)| p.find(governing.member).is_none());
+        }
+        let kind = if figures { "stack-drawing" } else { "cover-picture" };
+        let drawings = pages.into_iter().map(|(page, levels)| {
+            let height = levels.height;
             let sheet = Sheet {
                 stack: self,
-                layout: &layout,
+                layout,
                 page,
                 k,
-                first: FIRST + up * k,
-                pitch,
+                levels: levels.at,
                 drawing: Drawing::new(kind, WIDE, height),
                 placer: Placer::new(Rect::new(-1.5, 0.0, 122.5, height)),
                 figures,
@@ -173,15 +235,20 @@ impl Stack {
     }
 }
 
+/// Heights of the undeformed lines of a page's rows, and of the whole.
+struct Levels {
+    at: Vec<f64>,
+    height: f64,
+}
+
 struct Sheet<'a> {
     stack: &'a Stack,
     layout: &'a Layout,
     page: &'a Page,
     /// mm on paper for a mm of movement.
     k: f64,
-    /// Level of the first row.
-    first: f64,
-    pitch: f64,
+    /// Heights of the rows' undeformed lines.
+    levels: Vec<f64>,
     drawing: Drawing,
     placer: Placer,
     figures: bool,
@@ -273,7 +340,7 @@ impl Sheet<'_> {
                 _ => "from its first end".to_string(),
             };
             let mut body = vec![format!("{}, {} {from}", beam.mark, place(g.at))];
-            body.push(sum(g.own, g.inherited, g.settled, g.total));
+            body.push(sum(g.terms(), g.total));
             if let Some(limit) = g.limit {
                 body.push(format!("limit {} mm", tenth(limit * 1e3)));
             }
@@ -285,7 +352,8 @@ impl Sheet<'_> {
                 let own = shape::value_at(&beam.own, lands);
                 let total = shape::value_at(&beam.stacked, lands);
                 let title = format!("{} at {}, {} lands", beam.mark, place(lands), other.mark);
-                list.push((title, vec![sum(own, total - own, 0.0, total)]));
+                let rest = (self.stack.rest_of(member), total - own);
+                list.push((title, vec![sum([("own", own), rest, ("", 0.0)], total)]));
             }
         }
         list
@@ -327,11 +395,7 @@ impl Sheet<'_> {
         let governing = self.stack.governing.as_ref().filter(|g| beams.contains(&g.member)).map(|g| {
             let mark = self.stack.moved(g.member).map_or("", |b| b.mark.as_str());
             let limit = g.limit.map_or_else(String::new, |l| format!(", limit {} mm", tenth(l * 1e3)));
-            format!(
-                " Governing point: {mark} at {}, {}{limit}.",
-                place(g.at),
-                sum(g.own, g.inherited, g.settled, g.total)
-            )
+            format!(" Governing point: {mark} at {}, {}{limit}.", place(g.at), sum(g.terms(), g.total))
         });
         let (scales, promise) = self.scales();
         format!(
@@ -343,29 +407,26 @@ impl Sheet<'_> {
 }
 
 /// "own 10.4 + inherited 6.2 = 16.6", in mm, with as many decimals as make the sum right.
-fn sum(own: f64, inherited: f64, settled: f64, total: f64) -> String {
-    let terms = [own * 1e3, inherited * 1e3, settled * 1e3, total * 1e3];
+fn sum(terms: [(&str, f64); 3], total: f64) -> String {
     let adds = |decimals: i32| {
-        let unit = (0..decimals).fold(1.0, |u: f64, _| u * 10.0);
-        let whole = terms.map(|t| (t * unit).round());
-        (whole[0] + whole[1] + whole[2] - whole[3]).abs() < 0.5
+        let unit = (0..decimals).fold(1e3, |u: f64, _| u * 10.0);
+        let parts = terms.iter().map(|(_, t)| (t * unit).round()).sum::<f64>();
+        (parts - (total * unit).round()).abs() < 0.5
     };
     let decimals = (1..=3).find(|d| adds(*d)).unwrap_or(1);
-    let text = terms.map(|t| fixed(t, decimals));
-    let still = |n: usize| super::figures::is_zero(&fixed(terms[n], decimals));
-    let term = |name: &str, n: usize| match text[n].strip_prefix('\u{2212}') {
-        Some(size) => format!(" \u{2212} {name} {size}"),
-        None => format!(" + {name} {}", text[n]),
-    };
-    let mut line = format!("own {}", text[0]);
-    if still(1) && still(2) {
-        return format!("{line} mm");
+    let text = |movement: f64| fixed(movement * 1e3, decimals);
+    let mut line = format!("{} {}", terms[0].0, text(terms[0].1));
+    let mut alone = true;
+    for (name, movement) in &terms[1..] {
+        let figure = text(*movement);
+        if super::figures::is_zero(&figure) {
+            continue;
+        }
+        alone = false;
+        line.push_str(&match figure.strip_prefix('\u{2212}') {
+            Some(size) => format!(" \u{2212} {name} {size}"),
+            None => format!(" + {name} {figure}"),
+        });
     }
-    if !still(1) {
-        line.push_str(&term("inherited", 1));
-    }
-    if !still(2) {
-        line.push_str(&term("settled", 2));
-    }
-    format!("{line} = {}", text[3])
+    if alone { format!("{line} mm") } else { format!("{line} = {}", text(total)) }
 }

@@ -29,7 +29,7 @@ fn figure(movement: f64) -> Run {
 
 impl Sheet<'_> {
     pub(super) fn level(&self, row: usize) -> f64 {
-        self.first + self.pitch * row as f64
+        self.levels.get(row).copied().unwrap_or(0.0)
     }
 
     fn map(&self, member: usize) -> Option<Mapping> {
@@ -169,7 +169,7 @@ impl Sheet<'_> {
         let size = if g.total < 0.0 { -limit } else { limit };
         let y = map.y(size);
         // A limit that reaches into the next level is only said.
-        if (size * 1e3 * self.k).abs() < self.pitch - 14.0 {
+        if self.shows_limit(g.member, limit) {
             let (left, right) = (foot.x - LIMIT_HALF, foot.x + LIMIT_HALF);
             let line = Path::line(point(left.max(-1.0), y), point(right, y));
             self.placer.avoid(&line);
@@ -177,6 +177,12 @@ impl Sheet<'_> {
             self.drawing.height = self.drawing.height.max(y + 5.0);
             self.placer.frame.bottom = self.drawing.height;
         }
+    }
+
+    fn shows_limit(&self, member: usize, limit: f64) -> bool {
+        let row = self.page.find(member).map_or(0, |p| p.row);
+        let next = self.levels.get(row + 1).map_or(f64::from(u8::MAX), |next| next - self.level(row));
+        limit * 1e3 * self.k < next.min(60.0) - 14.0
     }
 
     pub(super) fn governing_figures(&mut self, g: &Governing) {
@@ -209,7 +215,7 @@ impl Sheet<'_> {
             let y = map.y(if down { limit } else { -limit });
             let runs = vec![run(Face::Regular, "limit "), run(Face::SemiBold, tenth(limit * 1e3))];
             let under = sideways(centred(x, below(y, 1.3)), 14.0).chain(sideways(centred(x, y - 1.0), 10.0));
-            if (limit * 1e3 * self.k).abs() < self.pitch - 14.0 {
+            if self.shows_limit(g.member, limit) {
                 self.placer.place(&mut self.drawing, Size::Diagram, &runs, under);
             }
         }
