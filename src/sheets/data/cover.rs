@@ -9,6 +9,8 @@ use serde_json::Value;
 
 use super::text::{Run, Runs, counted, keys, listed, sheet, to, words};
 use super::view::View;
+use crate::drawings::letters::{Face, wrapped};
+use crate::drawings::scene::Size;
 use crate::package::Package;
 
 #[derive(Debug, Serialize)]
@@ -75,19 +77,29 @@ pub(super) fn cover(package: &Package, view: View, picture: Option<Value>) -> Co
     }
 }
 
-/// Height in mm that the words of the cover leave to its picture, at least: lines are counted by letters of generous
-/// width.
+/// Height in mm that the words of the cover leave to its picture, by the measures of its template.
 fn room(title: &str, open: &[Item], scope: &Runs, outside: &[Item]) -> f64 {
+    /// From the first line to where the body ends.
     const BODY: f64 = 247.5;
     /// The line pitch of running text.
     const LINE: f64 = 4.5;
-    let lines = |letters: usize, a_line: usize| letters.div_ceil(a_line).max(1) as f64;
-    let letters = |runs: &Runs| runs.iter().map(Run::letters).sum::<usize>();
-    let list = |items: &[Item]| items.iter().map(|item| LINE * lines(letters(&item.words), 62)).sum::<f64>();
-    let head = 32.0 + 7.9 * lines(title.chars().count(), 28);
-    let verdict = 21.0 + if open.is_empty() { 0.0 } else { 17.0 + list(open) };
-    let signs = 19.0;
-    BODY - head - verdict - 9.0 - LINE * lines(letters(scope), 62) - list(outside) - signs - 10.0
+    let running = |runs: &Runs, width: f64| {
+        let text: String = runs.iter().map(Run::plain).collect();
+        LINE * lines(Face::Regular, &text, 9.2, width)
+    };
+    let list = |items: &[Item]| items.iter().map(|item| running(&item.words, 115.0)).sum::<f64>();
+    let head = 30.0 + 7.9 * lines(Face::Medium, title, 20.0, 120.0);
+    // The statement of the verdict takes at most two lines.
+    let verdict = if open.is_empty() { 22.0 } else { 39.0 + list(open) };
+    let signs = 17.0;
+    BODY - head - verdict - 9.0 - running(scope, 116.0) - list(outside) - signs - 10.0
+}
+
+/// Lines that a text takes, a little generously.
+fn lines(face: Face, text: &str, points: f64, width: f64) -> f64 {
+    /// The size that lines are counted at.
+    const NOTE: f64 = 7.8;
+    wrapped(face, text, Size::Note, 0.98 * width * NOTE / points).len().max(1) as f64
 }
 
 fn place(site: Option<&str>, client: Option<&str>) -> String {

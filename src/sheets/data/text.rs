@@ -32,14 +32,14 @@ pub(crate) enum Run {
 }
 
 impl Run {
-    /// About how many letters it takes in print.
-    pub fn letters(&self) -> usize {
+    /// About what it reads in print.
+    pub fn plain(&self) -> String {
         match self {
-            Run::Words(text) | Run::To { text, .. } => text.chars().count(),
-            Run::Value { v, u } => v.chars().count() + u.chars().count() + 1,
-            Run::Sheet { .. } => 9,
-            Run::Sheets { sheets } => 7 + 5 * sheets.len(),
-            Run::Symbol { .. } => 3,
+            Run::Words(text) | Run::To { text, .. } => text.clone(),
+            Run::Value { v, u } => format!("{v} {u}"),
+            Run::Sheet { .. } => "sheet 000".into(),
+            Run::Sheets { sheets } => format!("sheets{}", " 000,".repeat(sheets.len())),
+            Run::Symbol { sym } => (*sym).into(),
         }
     }
 }
