@@ -24,12 +24,14 @@ pub struct Typeset {
     pub warnings: Vec<Problem>,
 }
 
-/// Sets a package.
+/// Sets a package, once: what the typesetter remembered of it is forgotten before it is written, which keeps the
+/// greatest use of memory down. Whoever sets it again and again calls [`compile`] and [`Compiled::pdf`].
 ///
 /// # Errors
 /// A template that does not compile, or a document that cannot be an archive, with file and line where known.
 pub fn typeset(package: &Package) -> Result<Typeset, Fault> {
     let compiled = compile(&source(package)?)?;
+    typst::comemo::evict(0);
     Ok(Typeset {
         pdf: compiled.pdf(&package.meta.number, &package.record.program_version)?,
         sheets: compiled.document.pages().len(),
