@@ -181,6 +181,7 @@ fn figure(check: &Check, value: f64) -> String {
     match (check.kind, check.unit) {
         (CheckKind::Tilt, _) => one_in(value.abs()),
         (_, CheckUnit::Length) => movement(value),
+        (_, CheckUnit::Ratio) => utilisation(value),
         _ => three_figures(value, unit(check).0),
     }
 }

@@ -87,13 +87,13 @@ fn bar(screen: &Screen, results: &Results, shown: &Stacked, per_cell: f64) -> St
 /// The hand rule with its difference from the exact movement.
 fn hand_rule(results: &Results, beam: usize) -> String {
     let m = &results.beams[beam].movements;
-    let shown = m.governing.as_ref().unwrap_or(&m.stacked);
     let rule = movement(m.hand_rule.si());
-    let tenths = |metres: f64| (metres * 1e4).round();
-    let difference = tenths(m.hand_rule.si()) - tenths(shown.total.value.si().abs());
+    // From the full figures, as on the sheets; it may differ by 0.1 from the difference of the two printed ones.
+    let difference = m.hand_rule.si() - m.stacked.total.value.si().abs();
+    let by = movement(difference.abs());
     match difference {
-        0.0 => format!("{rule} the same"),
-        d if d > 0.0 => format!("{rule} safe by {}", movement(d * 1e-4)),
-        d => format!("{rule} unsafe by {}", movement(-d * 1e-4)),
+        _ if by == movement(0.0) => format!("{rule} the same"),
+        d if d > 0.0 => format!("{rule} safe by {by}"),
+        _ => format!("{rule} unsafe by {by}"),
     }
 }

@@ -4,8 +4,9 @@ use std::cmp::Ordering;
 
 use super::combined::{Combined, Writing, signed};
 use super::places::{carrier, heading};
-use super::workings;
+use super::{Required, run, workings};
 use crate::building::Building;
+use crate::limits::Movement;
 use crate::results::{BeamResult, Check, CheckKind, Combinations, Place, Results, Verdict};
 use crate::workings::account::Account;
 use crate::workings::{Tape, glossary};
@@ -32,7 +33,8 @@ pub fn account(building: &Building, results: &Results, beam: usize) -> Account {
     Account::of(&tape)
 }
 
-/// The checks whose workings are shown, in the order of their names: of each kind the worst.
+/// The checks whose workings are shown, in the order of their names: of each kind the worst, and the one that asks for
+/// the second moment of area that the beam needs.
 pub fn shown(own: &BeamResult) -> Vec<&Check> {
     let mut shown = Vec::new();
     for kind in CheckKind::ALL {
@@ -57,14 +59,41 @@ pub fn shown(own: &BeamResult) -> Vec<&Check> {
             | CheckKind::BendingWithShear
             | CheckKind::LateralTorsionalBuckling
             | CheckKind::Uplift
-            | CheckKind::TotalDeflection
+            | CheckKind::Tilt => shown.extend(of_kind.reduce(worse)),
+            // On several spans the one nearest its limit need not be the one that asks for the stiffest beam.
+            CheckKind::TotalDeflection
             | CheckKind::AfterDeflection
             | CheckKind::VariableDeflection
-            | CheckKind::StackedDeflection
-            | CheckKind::Tilt => shown.extend(of_kind.reduce(worse)),
+            | CheckKind::StackedDeflection => {
+                let worst = of_kind.clone().reduce(worse);
+                shown.extend(worst);
+                if !worst.is_some_and(|check| requires(own, check)) {
+                    shown.extend(of_kind.clone().find(|check| requires(own, check)));
+                }
+            }
         }
     }
     shown
+}
+
+/// Whether this check asks for the second moment of area that its beam needs.
+fn requires(own: &BeamResult, check: &Check) -> bool {
+    let second = &own.second_moment;
+    let movement = match check.kind {
+        CheckKind::TotalDeflection => Movement::Total,
+        CheckKind::AfterDeflection => Movement::After,
+        CheckKind::VariableDeflection => Movement::Variable,
+        CheckKind::StackedDeflection => Movement::Stacked,
+        _ => return false,
+    };
+    if second.governed_by != Some(movement) {
+        return false;
+    }
+    match check.inputs.as_ref().and_then(|inputs| run(inputs).required) {
+        Some(Required::Of(value)) => second.required == Some(value),
+        Some(Required::BudgetUsed) => second.budget_used,
+        None => false,
+    }
 }
 
 /// The check that decides a beam: the greatest share of those not met, else the first not verified, else the greatest

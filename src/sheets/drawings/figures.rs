@@ -1,6 +1,7 @@
 //! How numbers are written in drawings: three significant figures, a true minus sign, never a negative zero.
 
-/// Decimals that give `value` three significant figures; negative for tens and hundreds.
+/// Decimals that give `value` three significant figures; negative for tens and hundreds, never more than the three of
+/// the tables.
 fn decimals(value: f64) -> i32 {
     let size = value.abs();
     if size < 1e-12 || !size.is_finite() {
@@ -15,7 +16,7 @@ fn decimals(value: f64) -> i32 {
     }
     if decimals == 2 {
         let mut bound = 1.0;
-        while size < bound * (1.0 - 0.0005) && decimals < 9 {
+        while size < bound * (1.0 - 0.0005) && decimals < 3 {
             bound /= 10.0;
             decimals += 1;
         }
@@ -85,7 +86,7 @@ mod tests {
             (0.99999, "1.00"),
             (0.0, "0.00"),
             (123.4, "123"),
-            (0.07, "0.0700"),
+            (0.07, "0.070"),
         ];
         for (value, text) in cases {
             assert_eq!(three(value), text);
