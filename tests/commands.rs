@@ -1,5 +1,6 @@
 //! The commands as a new user runs them: whole jobs in, screens, files and exit codes out.
 
+use std::collections::BTreeSet;
 use std::fs;
 use std::path::{Path, PathBuf};
 use std::process::{Command, Output};
@@ -102,6 +103,32 @@ fn faults_exit_2_and_write_nothing() {
     let output = desk.run(&["check", "--format", "json"]);
     let faults: serde_json::Value = serde_json::from_slice(&output.stderr).unwrap();
     assert!(text(&output.stderr).contains("\"unit-missing\""), "{faults}");
+}
+
+#[test]
+fn ten_faults_are_all_said_in_order_of_lines_and_nothing_is_written() {
+    let desk = Desk::new();
+    let case = Path::new(env!("CARGO_MANIFEST_DIR")).join("tests/faults/ten.toml");
+    desk.job(fs::read(case).unwrap());
+    for command in ["check", "draft"] {
+        let output = desk.run(&[command]);
+        let said = text(&output.stderr);
+        assert_eq!(output.status.code(), Some(2), "{said}");
+        assert!(output.stdout.is_empty());
+        let heads: Vec<&str> = said.lines().filter(|line| line.starts_with("job.toml:")).collect();
+        let lines: Vec<u32> =
+            heads.iter().map(|head| head.split(':').nth(1).unwrap().parse().expect("a line")).collect();
+        let names: BTreeSet<&str> = heads.iter().filter_map(|head| head.split_whitespace().last()).collect();
+        // The lines of the ten faults of that file, counted by hand.
+        assert_eq!(lines, [2, 4, 8, 9, 23, 24, 25, 30, 38, 46], "{said}");
+        assert_eq!(names.len(), 10, "{said}");
+        assert!(said.ends_with("not read: 10 faults; nothing was computed\n"), "{said}");
+        assert_eq!(desk.files(), ["job.toml"]);
+    }
+    let output = desk.run(&["check", "--format", "json"]);
+    let faults: serde_json::Value = serde_json::from_slice(&output.stderr).unwrap();
+    assert_eq!((output.status.code(), output.stdout.len()), (Some(2), 0));
+    assert_eq!(faults.as_array().map(Vec::len), Some(10), "{faults}");
 }
 
 #[test]

@@ -8,6 +8,7 @@ mod combinations;
 mod continuous;
 mod overhangs;
 mod places;
+mod requirements;
 mod spans;
 
 use crate::second_road::YOUNG;
@@ -28,9 +29,18 @@ pub struct Case {
 
 pub struct Expected {
     pub path: String,
-    pub value: f64,
-    /// How far the figure may be away.
-    pub slack: f64,
+    pub wanted: Wanted,
+}
+
+pub enum Wanted {
+    /// A figure, and how far it may be away.
+    Figure {
+        value: f64,
+        slack: f64,
+    },
+    Word(&'static str),
+    /// Nothing under this path.
+    Absent,
 }
 
 impl Case {
@@ -44,10 +54,27 @@ impl Case {
         self.within(path, value, slack)
     }
 
-    fn within(mut self, path: &str, value: f64, slack: f64) -> Case {
-        self.expected.push(Expected { path: path.to_string(), value, slack });
+    fn within(self, path: &str, value: f64, slack: f64) -> Case {
+        self.wants(path, Wanted::Figure { value, slack })
+    }
+
+    fn says(self, path: &str, word: &'static str) -> Case {
+        self.wants(path, Wanted::Word(word))
+    }
+
+    fn absent(self, path: &str) -> Case {
+        self.wants(path, Wanted::Absent)
+    }
+
+    fn wants(mut self, path: &str, wanted: Wanted) -> Case {
+        self.expected.push(Expected { path: path.to_string(), wanted });
         self
     }
+}
+
+/// Cases of checks, which the second road does not make.
+pub fn requirements() -> Vec<Case> {
+    requirements::cases()
 }
 
 /// Every case.
@@ -68,21 +95,33 @@ pub fn cases() -> Vec<Case> {
 /// What a results file gets wrong of a case.
 pub fn misses(case: &Case, results: &Value) -> Vec<String> {
     let miss = |expected: &Expected| {
-        let figure = expected.path.split('.').try_fold(results, |value, key| match key.parse::<usize>() {
-            Ok(index) => value.get(index),
-            Err(_) => value.get(key),
-        });
+        let found = expected.path.split('.').try_fold(results, step);
         // A tilt may carry the sign of the side that goes down; its size is what is known here.
         let tilt = expected.path.ends_with("tilt");
-        match figure.and_then(Value::as_f64).map(|figure| if tilt { figure.abs() } else { figure }) {
-            Some(figure) if (figure - expected.value).abs() <= expected.slack => None,
-            found => Some(format!(
-                "{}: {} is {found:?}, not {} within {:e} ({})",
-                case.name, expected.path, expected.value, expected.slack, case.source
-            )),
-        }
+        let figure = found.and_then(Value::as_f64).map(|figure| if tilt { figure.abs() } else { figure });
+        let (right, wanted) = match expected.wanted {
+            Wanted::Figure { value, slack } => {
+                (figure.is_some_and(|figure| (figure - value).abs() <= slack), format!("{value} within {slack:e}"))
+            }
+            Wanted::Word(word) => (found.is_some_and(|found| found == word), format!("{word:?}")),
+            Wanted::Absent => (found.is_none(), "absent".to_string()),
+        };
+        let line = || format!("{}: {} is {found:?}, not {wanted} ({})", case.name, expected.path, case.source);
+        (!right).then(line)
     };
     case.expected.iter().filter_map(miss).collect()
+}
+
+/// One step down a path: a key, the place in a list, or `bending#0`, the first check of that name.
+fn step<'v>(value: &'v Value, key: &str) -> Option<&'v Value> {
+    if let Some((name, place)) = key.split_once('#') {
+        let mut named = value.as_array()?.iter().filter(|check| check["check"] == name);
+        return named.nth(place.parse().ok()?);
+    }
+    match key.parse::<usize>() {
+        Ok(index) => value.get(index),
+        Err(_) => value.get(key),
+    }
 }
 
 /// A job of beams on walls named a to f, with keys of `[basis]` (may be empty).

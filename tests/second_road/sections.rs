@@ -38,6 +38,17 @@ const DIMENSIONS: &[(&str, [f64; 5])] = &[
     ("254x254x73 UC", [254.1, 254.6, 8.6, 14.2, 12.7]),
 ];
 
+/// h, b, tw, tf, r in mm of a section by its name.
+pub fn dimensions(name: &str) -> [f64; 5] {
+    let plain = |name: &str| name.to_lowercase().replace('×', "x").replace(' ', "");
+    let wanted = plain(name);
+    let (_, dimensions) = DIMENSIONS
+        .iter()
+        .find(|(known, _)| plain(known) == wanted)
+        .unwrap_or_else(|| panic!("the second road has no section {name:?}"));
+    *dimensions
+}
+
 /// What the statics need of a section, SI.
 #[derive(Clone, Copy, Debug)]
 pub struct Shape {
@@ -51,13 +62,7 @@ pub struct Shape {
 impl Shape {
     /// A section by the name that the trade gives it: any case, `x` or `×`, spaces free.
     pub fn named(name: &str) -> Shape {
-        let plain = |name: &str| name.to_lowercase().replace('×', "x").replace(' ', "");
-        let wanted = plain(name);
-        let (_, dimensions) = DIMENSIONS
-            .iter()
-            .find(|(known, _)| plain(known) == wanted)
-            .unwrap_or_else(|| panic!("the second road has no section {name:?}"));
-        Shape::of(dimensions.map(|size| size / 1e3))
+        Shape::of(dimensions(name).map(|size| size / 1e3))
     }
 
     fn of([depth, width, web, flange, root]: [f64; 5]) -> Shape {
