@@ -125,6 +125,7 @@ impl Combination {
         let led: Vec<String> = self.variable.iter().filter(|v| v.leads).map(|v| actions.name(v.action)).collect();
         match led.as_slice() {
             [] if self.variable.is_empty() => "permanent".into(),
+            [] if self.expression == Expression::E610a => "6.10a".into(),
             [] => "none leads".into(),
             [one] => format!("{one} leads"),
             [_, _, ..] => "imposed leads".into(),

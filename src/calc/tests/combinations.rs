@@ -229,7 +229,7 @@ fn names_tell_what_leads_and_what_comes_with_it() {
             Strength,
             Pair,
             vec!["6.10b, imposed A and imposed C leading", "6.10a, permanent with imposed A and imposed C"],
-            vec!["imposed leads", "none leads"],
+            vec!["imposed leads", "6.10a"],
         ),
         (
             "B wind:",

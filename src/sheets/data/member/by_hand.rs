@@ -3,7 +3,7 @@
 use sagledger_calc::building::Beam;
 use sagledger_calc::materials::E;
 use sagledger_calc::results::{HandCase, HandCheck, TextbookCase};
-use sagledger_calc::workings::decimal;
+use sagledger_calc::workings::decimal::{self, Decimal, Rounding};
 use sagledger_calc::workings::unit::Unit;
 use serde::Serialize;
 
@@ -53,7 +53,13 @@ pub(super) fn by_hand(_view: View, beam: &Beam, hand: &HandCheck) -> ByHand {
 }
 
 fn row(case: &HandCase, at: f64, span: f64) -> Row {
-    let kn_m = |si: f64| decimal::three_figures(si, Unit::KnPerM);
+    // Moments stand beside the loads to 0.01 kNm: they follow from loads as they are printed.
+    let figures = if case.moment.si().abs() < 5e3 { 4 } else { 5 };
+    let fine = |si: f64, unit: Unit| {
+        let rounded = Decimal::rounded(si, Rounding::Significant(figures), unit);
+        rounded.map_or_else(|| decimal::three_figures(si, unit), |d| d.to_string())
+    };
+    let kn_m = |si: f64| fine(si, Unit::KnPerM);
     let (place, load, unit, form) = match &case.case {
         TextbookCase::Line { from, to, design, .. } => {
             let (from, to) = (from.si(), to.si());
@@ -80,12 +86,12 @@ fn row(case: &HandCase, at: f64, span: f64) -> Row {
             } else {
                 "point-right"
             };
-            (along(p), decimal::three_figures(design.si(), Unit::Kn), "kN", form)
+            (along(p), fine(design.si(), Unit::Kn), "kN", form)
         }
         TextbookCase::EndMoment { at_left, design, .. } => {
             let place = if *at_left { along(0.0) } else { along(span) };
             let form = if *at_left { "moment-left" } else { "moment-right" };
-            (place, decimal::three_figures(design.si(), Unit::Knm), "kNm", form)
+            (place, fine(design.si(), Unit::Knm), "kNm", form)
         }
     };
     Row {
