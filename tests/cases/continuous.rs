@@ -3,7 +3,14 @@
 use super::*;
 
 pub fn cases() -> Vec<Case> {
-    vec![two_spans_permanent(), two_spans_pattern(), three_spans(), four_spans(), middle_settles()]
+    vec![
+        two_spans_permanent(),
+        two_spans_pattern(),
+        three_spans(),
+        four_spans(),
+        middle_settles(),
+        on_a_crossing_beam(),
+    ]
 }
 
 fn spans(basis: &str, section: &str, count: usize, span: f64, rows: &[&str]) -> String {
@@ -132,4 +139,40 @@ fn middle_settles() -> Case {
     .is("beams.0.deflection_mm.stacked_total", (own(top) + settled(top)).max(settles) * 1e3, EXACT)
     .within("beams.0.deflection_mm.inherited_there", 0.0, 1e-12)
     .is("beams.0.tilt", settles / span, EXACT)
+}
+
+/// The middle of two equal spans stands on the middle of another beam: a force method with one unknown. Each span's own
+/// movement is measured from the line between its own two bearings, of which the middle one has gone down.
+fn on_a_crossing_beam() -> Case {
+    let (section, span, load) = ("254x146x31 UB", 3.6_f64, 7.0);
+    let (stiffness, weight) = stiffness_and_weight(section);
+    let (crossing, reach) = ("203x133x30 UB", 4.2_f64);
+    let (crossing_stiffness, crossing_weight) = stiffness_and_weight(crossing);
+    let whole = 2.0 * span;
+    let free = uniform_line(load, whole, span)[0] / stiffness;
+    let below = uniform_line(crossing_weight, reach, reach / 2.0)[0] / crossing_stiffness;
+    let give = reach.powi(3) / (48.0 * crossing_stiffness);
+    let force = (free - below) / (whole.powi(3) / (48.0 * stiffness) + give);
+    let middle = below + force * give;
+    let line = |x: f64| {
+        let (uniform, point) = (uniform_line(load, whole, x), point_line(force, whole, span, x));
+        [0, 1].map(|index| (uniform[index] - point[index]) / stiffness)
+    };
+    let own_top = root(0.2 * span, 0.8 * span, |x| line(x)[1] - middle / span);
+    let row = self::line("permanent", load - weight);
+    let bearings = [wall("a", 0.0), carried(span, "X", reach / 2.0), wall("b", whole)];
+    let beams = [
+        beam("C", section, whole, &bearings, &[&row]),
+        beam("X", crossing, reach, &[wall("c", 0.0), wall("d", reach)], &[]),
+    ];
+    Case::new(
+        "two spans over a crossing beam",
+        "5wL4/384EI, PL3/48EI, handbooks, by a force method",
+        job("", &beams.concat()),
+    )
+    .is("beams.0.bearings.1.reaction_kN.permanent", force, EXACT)
+    .is("beams.0.bearings.0.reaction_kN.permanent", load * span - force / 2.0, EXACT)
+    .is("beams.0.tilt", middle / span, EXACT)
+    .is("beams.0.deflection_mm.own_total", (line(own_top)[0] - middle * own_top / span) * 1e3, EXACT)
+    .is("beams.1.deflection_mm.stacked_total", middle * 1e3, EXACT)
 }

@@ -87,14 +87,14 @@ fn landings_at_one_place(with_point: bool) -> Case {
         let (_, weight) = stiffness_and_weight(upper);
         (1.35 * weight + 1.5 * load) * length / 2.0
     };
-    let force = end(one) + end(other) + 1.35 * point_force;
+    let force = end(one) + end(other) + 1.5 * point_force;
     let stiff = if with_point { 0.0 } else { under(other.0).min(under(one.0)) };
     let (stiffness, weight) = stiffness_and_weight(section);
     let moment = (force / span + 1.35 * weight / 2.0) * at * (span - at);
     // W_el = 2 I / h, EI in kNm2 and h in mm.
     let elastic = 2.0 * stiffness / (YOUNG / 1e3) / (dimensions(section)[0] / 1e3) * YIELD * 1e3;
     let resistance = web(section, stiff, None, span * 1e3);
-    let row = point("permanent", 6.0, at);
+    let row = point("imposed", 6.0, at);
     let rows: Vec<&str> = if with_point { vec![&row] } else { vec![] };
     let upper = |mark: &str, wall_name: &str, (upper, length, load): (&str, f64, f64)| {
         let carried = with(carried(length, "S", at), "joint = \"on top flange\"");
@@ -204,6 +204,13 @@ fn held_overhang(bottom: bool) -> Case {
     .is("beams.0.checks.lateral-torsional buckling#0.demand", first * first / (2.0 * design), EXACT)
     .is("beams.0.checks.lateral-torsional buckling#1.demand", design * beyond * beyond / 2.0, EXACT)
     .absent("beams.0.checks.lateral-torsional buckling#2")
+    .within("beams.0.moment_kNm.min_at_m", span, 1e-6)
+    // span/250 and span/360 unless the job says otherwise, of the span and of twice the overhang (UK NA.2.23, common
+    // practice); the stacked movement of an overhang may be that of the span beside it.
+    .is("beams.0.checks.total deflection#0.capacity", span * 4.0, EXACT)
+    .is("beams.0.checks.total deflection#1.capacity", 2.0 * beyond * 4.0, EXACT)
+    .is("beams.0.checks.variable deflection#1.capacity", 2.0 * beyond / 0.36, EXACT)
+    .is("beams.0.checks.stacked deflection#1.capacity", span * 4.0, EXACT)
 }
 
 /// A beam that sags everywhere needs its top flange held and no other; one that wind lifts beyond its own weight sags in

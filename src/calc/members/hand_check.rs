@@ -20,7 +20,9 @@ pub fn hand_check(solved: &Solved, local: usize, moment: &Found<1, 1>, own: &Fou
     let span = right - left;
     // Both are looked at where the moment is greatest, or where the own movement is if that is beyond the span.
     let candidates = [moment.effect.at.si(), own.effect.at.si(), 0.5 * (left + right)];
-    let x = candidates.into_iter().find(|x| *x > left && *x < right)? - left;
+    // A place that only rounding tells from a bearing would show a movement of nothing.
+    let margin = 1e-6 * span;
+    let x = candidates.into_iter().find(|x| *x > left + margin && *x < right - margin)? - left;
     let ei = E.si() * beam.section.i_y.si();
 
     let name = |row: usize| match row {
