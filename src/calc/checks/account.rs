@@ -23,7 +23,10 @@ pub fn account(building: &Building, results: &Results, beam: usize) -> Account {
         if closest.is_some_and(|closest| std::ptr::eq(closest, check))
             && let Some(beam) = building.beams.get(beam)
         {
-            head = format!("{head}: the closest check of {}", beam.mark);
+            head = match check.verdict {
+                Verdict::NotVerified => format!("{head}: what keeps {} from being verified", beam.mark),
+                Verdict::Met | Verdict::NotMet => format!("{head}: the closest check of {}", beam.mark),
+            };
         }
         tape.chapter(&head);
         workings(inputs, &tape);

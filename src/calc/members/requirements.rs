@@ -5,6 +5,7 @@ use super::interaction::worst_place;
 use super::movements::{chord_movements, in_stretch, parts_under, stacked, stretch_at, tilt};
 use super::required::{allowed, beside, resolved};
 use super::{MovementFields, Sets};
+use crate::actions::Action;
 use crate::analysis::contribution::Contribution;
 use crate::analysis::envelope::{Found, Sense};
 use crate::analysis::solved::Solved;
@@ -285,8 +286,11 @@ impl Collect<'_> {
         for (n, bearing) in self.known.bearings.iter().enumerate() {
             let held_down = self.solved.beam(self.local).bearings[n].held_down;
             let Some(reaction) = self.combined(&bearing.least) else { continue };
+            // Where permanent actions alone press least, no combination of variable ones is to be named.
+            let alone = reaction.parts.iter().all(|part| part.action == Action::Permanent);
+            let how = if alone { None } else { how(&bearing.least) };
             let inputs = Inputs::Uplift(Uplift { reaction, held_down });
-            self.push(CheckKind::Uplift, Place::Bearing { index: n }, bearing.at, how(&bearing.least), inputs);
+            self.push(CheckKind::Uplift, Place::Bearing { index: n }, bearing.at, how, inputs);
         }
     }
 
