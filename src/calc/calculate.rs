@@ -1,5 +1,7 @@
 //! From a building to its results.
 
+use std::collections::BTreeMap;
+
 use crate::actions::combinations::{Purpose, combinations};
 use crate::actions::{Action, Actions};
 use crate::analysis::component::{carriers, components, order};
@@ -223,22 +225,20 @@ impl Supports {
     }
 
     fn add(&mut self, solved: &Solved) {
-        for wall in 0..self.walls.len() {
-            let mut values = vec![0.0; solved.contributions.len()];
-            let mut bears = false;
-            for local in 0..solved.members.len() {
-                for (n, seat) in solved.beam(local).bearings.iter().enumerate() {
-                    if seat.on == Carrier::Wall(wall) {
-                        bears = true;
-                        for (c, value) in solved.reaction(local, n) {
-                            values[c] += value;
-                        }
-                    }
+        let mut arriving: BTreeMap<usize, Vec<f64>> = BTreeMap::new();
+        for local in 0..solved.members.len() {
+            for (n, seat) in solved.beam(local).bearings.iter().enumerate() {
+                let Carrier::Wall(wall) = seat.on else { continue };
+                let values = arriving.entry(wall).or_insert_with(|| vec![0.0; solved.contributions.len()]);
+                for (c, value) in solved.reaction(local, n) {
+                    values[c] += value;
                 }
             }
-            if bears {
-                self.walls[wall].0.extend(solved.contributions.iter().copied());
-                self.walls[wall].1.extend(values);
+        }
+        for (wall, values) in arriving {
+            if let Some(all) = self.walls.get_mut(wall) {
+                all.0.extend(solved.contributions.iter().copied());
+                all.1.extend(values);
             }
         }
     }

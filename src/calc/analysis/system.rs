@@ -40,8 +40,8 @@ pub struct System<'a> {
     pub members: &'a [usize],
     pub breaks: &'a [Vec<f64>],
     elastic: Vec<Elastic>,
-    /// Local index of a beam of the building.
-    local: Vec<Option<usize>>,
+    /// Beams of the building with their local indices, sorted.
+    local: Vec<(usize, usize)>,
     /// Inner bearings: (local beam, bearing).
     inner: Vec<(usize, usize)>,
     factored: Option<Cholesky<f64, Dyn>>,
@@ -61,10 +61,8 @@ impl<'a> System<'a> {
         breaks: &'a [Vec<f64>],
         variant: Variant,
     ) -> Result<System<'a>, Fault> {
-        let mut local = vec![None; building.beams.len()];
-        for (n, &beam) in members.iter().enumerate() {
-            local[beam] = Some(n);
-        }
+        let mut local: Vec<(usize, usize)> = members.iter().enumerate().map(|(n, &beam)| (beam, n)).collect();
+        local.sort_unstable();
         let elastic = members.iter().enumerate().map(|(n, &beam)| {
             let factor = variant.scaled.filter(|s| s.0 == n).map_or(1.0, |s| s.1);
             elastic_of(building, beam, factor, building.basis.shear_flexibility != variant.other_shear)
@@ -106,6 +104,12 @@ impl<'a> System<'a> {
         Cholesky::new(symmetric).map(Some).ok_or(fault)
     }
 
+    /// Local index of a beam of the building.
+    fn local(&self, beam: usize) -> Option<usize> {
+        let found = self.local.binary_search_by_key(&beam, |(beam, _)| *beam).ok()?;
+        Some(self.local[found].1)
+    }
+
     /// Responses to a unit load.
     pub fn unit(&self, unit: &UnitLoad) -> Responses {
         let direct = [(unit.beam, Forces::of(&unit.shape))];
@@ -143,7 +147,7 @@ impl<'a> System<'a> {
             let carrier = match seat.on {
                 Carrier::Wall(_) if case.settles => seat.settles.si(),
                 Carrier::Wall(_) => 0.0,
-                Carrier::Beam { beam, lands } => self.local[beam].map_or(0.0, |local| at(local, lands.si())),
+                Carrier::Beam { beam, lands } => self.local(beam).map_or(0.0, |local| at(local, lands.si())),
             };
             at(beam, seat.at.si()) - carrier
         };
@@ -182,7 +186,7 @@ impl<'a> System<'a> {
                 }
                 if let Carrier::Beam { beam, lands } = b.bearings[bearing].on
                     && *force != 0.0
-                    && let Some(carrier) = self.local[beam]
+                    && let Some(carrier) = self.local(beam)
                 {
                     forces[carrier].points.push((lands.si(), *force));
                 }
@@ -202,7 +206,8 @@ impl<'a> System<'a> {
                 let movement = match seat.on {
                     Carrier::Wall(_) if case.settles => seat.settles.si(),
                     Carrier::Wall(_) => 0.0,
-                    Carrier::Beam { beam, lands } => self.local[beam]
+                    Carrier::Beam { beam, lands } => self
+                        .local(beam)
                         .and_then(|c| {
                             responses[c].as_ref().map(|r| value_at(&self.breaks[c], &r.movement, lands.si()))
                         })
