@@ -51,7 +51,7 @@ pub fn calculate(building: &Building) -> Result<Results, Vec<Fault>> {
             .map(|b| b.loads.iter().map(|r| resolve(building, &actions, r)).collect())
             .collect(),
         stretches: building.beams.iter().map(stretches).collect(),
-        landings: all_landings(building),
+        landings: landings(building),
         actions: actions.clone(),
     };
     let all = |purpose| combinations(purpose, building.basis.rule, building.basis.choices, &actions);
@@ -79,15 +79,6 @@ pub fn calculate(building: &Building) -> Result<Results, Vec<Fault>> {
     let verdict = beams.iter().map(|b| b.verdict).max().unwrap_or(Verdict::Met);
     let assumptions = assumptions(building, &actions);
     Ok(Results { actions, combinations: combined, beams, walls, takedown, order, chains, assumptions, verdict })
-}
-
-fn all_landings(building: &Building) -> Vec<Vec<crate::results::Landing>> {
-    let mut carried = vec![false; building.beams.len()];
-    for carrier in building.beams.iter().flat_map(carriers) {
-        carried[carrier] = true;
-    }
-    let one = |(n, carries): (usize, &bool)| if *carries { landings(building, n) } else { Vec::new() };
-    carried.iter().enumerate().map(one).collect()
 }
 
 /// All results of one component's beams, written to their places in `beams`, and its chain.

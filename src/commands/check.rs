@@ -4,7 +4,6 @@ use std::io::IsTerminal;
 use std::path::PathBuf;
 
 use clap::Args;
-use sagledger_calc::results::Verdict;
 
 use super::{Ending, Format, Shared, complain, read_and_compute, say};
 use crate::Computed;
@@ -58,17 +57,17 @@ pub fn run(arguments: &Arguments, shared: &Shared) -> Ending {
 }
 
 fn one(computed: &Computed, arguments: &Arguments, shared: &Shared) -> Result<(), Ending> {
+    let screen = shared.output();
+    let (building, results) = (&computed.job.building, &computed.results);
+    if shared.quiet() && arguments.format == Format::Text {
+        return say(&(verdict::lines(&screen, building, results).join("\n") + "\n"));
+    }
     let results_text = computed.results_text().map_err(|error| {
         complain(&format!("results: {error}"));
         Ending::Machine
     })?;
     if arguments.format == Format::Json {
         return say(&results_text);
-    }
-    let screen = shared.output();
-    let (building, results) = (&computed.job.building, &computed.results);
-    if shared.quiet() {
-        return say(&(verdict::lines(&screen, building, results).join("\n") + "\n"));
     }
     let fingerprint = computed.fingerprint(&results_text);
     let heading = ledger::Heading {
@@ -78,11 +77,7 @@ fn one(computed: &Computed, arguments: &Arguments, shared: &Shared) -> Result<()
     };
     say(&ledger::text(&screen, &heading, building, results, arguments.only.is_some()))?;
     if std::io::stdout().is_terminal() && std::io::stderr().is_terminal() {
-        let next = match (results.verdict, verdict::worst_member(building, results)) {
-            (Verdict::Met, _) | (_, None) => "next: sagledger draft".to_string(),
-            (_, Some(_)) => "next: sagledger draft -o draft.pdf".to_string(),
-        };
-        complain(&shared.errors().dim(&next));
+        complain(&shared.errors().dim("next: sagledger draft"));
     }
     Ok(())
 }

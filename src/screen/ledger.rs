@@ -7,7 +7,7 @@ use sagledger_calc::workings::decimal::{movement, one_in, three_figures, utilisa
 use sagledger_calc::workings::unit::Unit;
 
 use super::table::{Align, Cell, Column, Row, lines};
-use super::{Screen, cells, left, movements, right, scale, verdict};
+use super::{Screen, cells, movements, right, scale, verdict};
 
 /// What a job says of itself above its ledger.
 pub struct Heading<'a> {
@@ -192,10 +192,9 @@ fn demand_figure(check: &Check) -> String {
 
 /// The limit with its unit; where a check is not verified, why.
 fn limit_cell(check: &Check) -> String {
-    match (check.verdict, check.capacity) {
-        (Verdict::NotVerified, _) => check.reason.clone().filter(|r| r != check.kind.name()).unwrap_or_default(),
-        (_, Some(c)) => left(format!("{} {}", figure(check, c), unit(check).1).trim_end(), 0),
-        (_, None) => String::new(),
+    match check.verdict {
+        Verdict::NotVerified => check.reason.clone().filter(|r| r != check.kind.name()).unwrap_or_default(),
+        Verdict::Met | Verdict::NotMet => capacity(check),
     }
 }
 

@@ -1,7 +1,7 @@
 //! The job's verdict, what is not met, what is not verified, what is outside.
 
 use sagledger_calc::building::Building;
-use sagledger_calc::checks::{account, places};
+use sagledger_calc::checks::places;
 use sagledger_calc::outside::outside;
 use sagledger_calc::results::{Check, Results, Verdict};
 
@@ -69,19 +69,4 @@ fn unverified(building: &Building, results: &Results, beam: usize, check: &Check
         Some(reason) if reason != name => format!("{name} of {mark}, {place}, {reason}"),
         _ => format!("{name} of {mark}, {place}"),
     }
-}
-
-/// Members that decide the verdict, for the `next:` line.
-pub fn worst_member(building: &Building, results: &Results) -> Option<String> {
-    let mut worst: Option<(usize, &Check)> = None;
-    for &beam in &results.order {
-        let Some(check) = account::closest(&results.beams[beam]) else { continue };
-        let better = worst.is_none_or(|(_, w)| {
-            (check.verdict, check.utilisation.unwrap_or(0.0)) > (w.verdict, w.utilisation.unwrap_or(0.0))
-        });
-        if better {
-            worst = Some((beam, check));
-        }
-    }
-    worst.map(|(beam, _)| building.beams[beam].mark.clone())
 }

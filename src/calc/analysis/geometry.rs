@@ -28,19 +28,19 @@ pub fn stretches(beam: &Beam) -> Vec<Stretch> {
     stretches
 }
 
-/// Beams that land on `beam`, by place along it; ties in the order of the building.
-pub fn landings(building: &Building, beam: usize) -> Vec<Landing> {
-    let mut landings = Vec::new();
-    for (other, b) in building.beams.iter().enumerate() {
+/// Beams that land on each beam of the building, by place along it; ties in the order of the building.
+pub fn landings(building: &Building) -> Vec<Vec<Landing>> {
+    let mut landings = vec![Vec::new(); building.beams.len()];
+    for (beam, b) in building.beams.iter().enumerate() {
         for (bearing, seat) in b.bearings.iter().enumerate() {
-            if let Carrier::Beam { beam: carrier, lands } = seat.on
-                && carrier == beam
-            {
-                landings.push(Landing { beam: other, bearing, at: lands });
+            if let Carrier::Beam { beam: carrier, lands } = seat.on {
+                landings[carrier].push(Landing { beam, bearing, at: lands });
             }
         }
     }
-    landings.sort_by(|a, b| a.at.si().total_cmp(&b.at.si()));
+    for list in &mut landings {
+        list.sort_by(|a: &Landing, b: &Landing| a.at.si().total_cmp(&b.at.si()));
+    }
     landings
 }
 

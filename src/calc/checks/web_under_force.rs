@@ -25,7 +25,7 @@ use crate::materials::Grade;
 use crate::quantity::{Force, Length, Ratio, min, number};
 use crate::results::{CheckUnit, Verdict};
 use crate::workings::lines::step;
-use crate::workings::{Number, Workings, glossary};
+use crate::workings::{Number, Silent, Workings, glossary};
 
 pub(super) const CLAUSE: &str = "EN 1993-1-5 6.2";
 
@@ -142,11 +142,34 @@ fn resistance<N: Number, W: Workings<N>>(w: &mut W, inputs: &WebUnderForce, s: &
     F_Rd
 }
 
+impl StiffLength {
+    /// How long it is, before the web's depth bounds it.
+    pub fn length(&self) -> Length {
+        arriving(&mut Silent, self)
+    }
+}
+
 fn stiff_length<N: Number, W: Workings<N>>(w: &mut W, stiff: &StiffLength, h_w: Length<N>) -> Length<N> {
-    const CLAUSE: &str = "EN 1993-1-5 6.3";
-    let s_s = match stiff {
+    let s_s = arriving(w, stiff);
+    if w.when(
+        STIFF,
+        s_s.at_most(h_w),
+        "the stiff length counts in full",
+        "the stiff length counts up to the web\u{2019}s depth",
+    ) {
+        return s_s;
+    }
+    step!(w, "EN 1993-1-5 6.3(1)", s_s = min(s_s, h_w));
+    s_s
+}
+
+const STIFF: &str = "EN 1993-1-5 6.3";
+
+/// Over which length the force arrives, before the web's depth bounds it.
+fn arriving<N: Number, W: Workings<N>>(w: &mut W, stiff: &StiffLength) -> Length<N> {
+    match stiff {
         StiffLength::Seat(length) => {
-            w.looked_up(CLAUSE, &glossary::s_s, *length, "the seat is stiff over its length")
+            w.looked_up(STIFF, &glossary::s_s, *length, "the seat is stiff over its length")
         }
         StiffLength::Crossing { mark, t_f, t_w, r } => {
             let t_f = w.given(glossary::t_f_above.of(mark.as_str()), *t_f);
@@ -160,19 +183,9 @@ fn stiff_length<N: Number, W: Workings<N>>(w: &mut W, stiff: &StiffLength, h_w: 
         }
         StiffLength::Unknown => {
             let nought = Length::from_si(0.0);
-            w.looked_up(CLAUSE, &glossary::s_s, nought, "the stiff length is not known and taken as nought")
+            w.looked_up(STIFF, &glossary::s_s, nought, "the stiff length is not known and taken as nought")
         }
-    };
-    if w.when(
-        CLAUSE,
-        s_s.at_most(h_w),
-        "the stiff length counts in full",
-        "the stiff length counts up to the web\u{2019}s depth",
-    ) {
-        return s_s;
     }
-    step!(w, "EN 1993-1-5 6.3(1)", s_s = min(s_s, h_w));
-    s_s
 }
 
 /// What the effective length and the slenderness depend on, but for m_2.

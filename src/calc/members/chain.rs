@@ -1,6 +1,5 @@
 //! Connected beams, moved together.
 
-use super::MovementFields;
 use crate::analysis::envelope::Found;
 use crate::analysis::solved::Solved;
 use crate::quantity::Length;
@@ -9,7 +8,6 @@ use crate::results::{Chain, ChainCurve};
 /// The chain under the combination and arrangement of one movement of one of its beams.
 pub fn chain(solved: &Solved, governing_beam: usize, movement: &Found<0, 1>) -> Chain {
     let one = |(local, &beam): (usize, &usize)| {
-        let fields = MovementFields::new(solved, local);
         let places = solved.beam(local).bearings.iter().map(|b| b.at.si());
         let bearings = places.map(|x| {
             let loads = solved.factored_movement(local, x, &movement.factors);
@@ -17,8 +15,8 @@ pub fn chain(solved: &Solved, governing_beam: usize, movement: &Found<0, 1>) -> 
         });
         ChainCurve {
             beam,
-            own: solved.factored(fields.own.field(), &movement.factors),
-            stacked: solved.factored(fields.stacked.field(), &movement.factors),
+            own: solved.factored(&solved.own(local), &movement.factors),
+            stacked: solved.factored(&solved.stacked(local), &movement.factors),
             bearings: bearings.collect(),
         }
     };

@@ -210,7 +210,7 @@ impl Collect<'_> {
             let outer = n == 0 || n == last;
             let way = if outer && to_end < beam.section.h.si() {
                 // At the very end the beam is taken to reach the far edge of its seat.
-                let c = if to_end == 0.0 { 0.0 } else { (to_end - 0.5 * stiff_size(&stiff)).max(0.0) };
+                let c = if to_end == 0.0 { 0.0 } else { (to_end - 0.5 * stiff.length().si()).max(0.0) };
                 Way::AtEnd { c: Length::from_si(c) }
             } else {
                 Way::Within
@@ -258,7 +258,7 @@ impl Collect<'_> {
                         None => sum.push((c, value)),
                     }
                 }
-                if stiff_size(&stiff) < stiff_size(least) {
+                if stiff.length().si() < least.length().si() {
                     *least = stiff;
                 }
             }
@@ -521,15 +521,6 @@ fn crossing(solved: &Solved, beam: usize) -> StiffLength {
     let other = &solved.building.beams[beam];
     let s = &other.section;
     StiffLength::Crossing { mark: other.mark.clone(), t_f: s.t_f, t_w: s.t_w, r: s.r }
-}
-
-/// EN 1993-1-5 6.3: how long the stiff length is, m.
-fn stiff_size(stiff: &StiffLength) -> f64 {
-    match stiff {
-        StiffLength::Seat(length) => length.si(),
-        StiffLength::Crossing { t_f, t_w, r, .. } => 2.0 * t_f.si() + t_w.si() + 1.17 * r.si(),
-        StiffLength::Unknown => 0.0,
-    }
 }
 
 /// Own movement at a place by contribution.
